@@ -1,0 +1,155 @@
+import { type ReactNode, useEffect, useId, useMemo, useRef, useState } from 'react'
+import {
+  type DefaultValues,
+  type FieldErrors,
+  type FieldValues,
+  FormProvider,
+  type Path,
+  useForm,
+} from 'react-hook-form'
+import type { z } from 'zod'
+import { ApiError } from '../api/ApiError.ts'
+import { Button } from '../ui/Button.tsx'
+import { Notice } from '../ui/Notice.tsx'
+import { ErrorSummary, type SummaryEntry } from './ErrorSummary.tsx'
+import { FormContext, type FormParts } from './formContext.ts'
+import { type FormSchema, formResolver } from './formResolver.ts'
+import { useUnsavedWork } from './UnsavedWork.tsx'
+
+type FormProps<S extends FormSchema, Answer> = {
+  schema: S
+  defaultValues: DefaultValues<z.input<S>>
+  /** Throws an ApiError where the server refuses; its fields come back to their places. */
+  onSubmit: (values: z.output<S>) => Promise<Answer>
+  /** After saving, when nothing holds the page any more: the place to go on from. */
+  onSaved?: (answer: Answer) => unknown
+  submitLabel: string
+  busyLabel?: string
+  kind?: 'primary' | 'danger'
+  onCancel?: () => void
+  cancelLabel?: string
+  /** Why nothing can be changed here, as a sentence. */
+  locked?: string
+  /** Asks before unsaved work is left. */
+  guard?: boolean
+  /** More to press beside the submit button. */
+  secondary?: ReactNode
+  children: ReactNode
+}
+
+/** The one form: checks by schema, sums errors up, keeps what was typed, says why it is locked. */
+export function Form<S extends FormSchema, Answer>(props: FormProps<S, Answer>) {
+  const { schema, locked, guard = true, onSubmit, onSaved } = props
+  const [parts] = useFormPartsOnce()
+  const summary = useRef<HTMLDivElement>(null)
+  const [refusals, setRefusals] = useState(0)
+  const [refusal, setRefusal] = useState<{ message: string; requestId?: string } | null>(null)
+
+  const form = useForm<z.input<S>, unknown, z.output<S>>({
+    resolver: useMemo(() => formResolver(schema, parts.numberFields), [schema, parts]),
+    defaultValues: props.defaultValues,
+    shouldFocusError: false,
+  })
+  const { errors, isDirty, isSubmitting } = form.formState
+  const letGo = useUnsavedWork(guard && isDirty && locked === undefined)
+
+  useEffect(() => {
+    if (refusals > 0) summary.current?.focus()
+  }, [refusals])
+
+  const save = form.handleSubmit(
+    async (values) => {
+      setRefusal(null)
+      try {
+        const answer = await onSubmit(values)
+        form.reset(undefined, { keepValues: true })
+        letGo()
+        onSaved?.(answer)
+      } catch (error) {
+        for (const [name, message] of Object.entries(fieldsOf(error))) {
+          form.setError(name as Path<z.input<S>>, { type: 'server', message })
+        }
+        setRefusal(refusalOf(error))
+        setRefusals((count) => count + 1)
+      }
+    },
+    () => {
+      setRefusal(null)
+      setRefusals((count) => count + 1)
+    },
+  )
+  const entries = refusals > 0 ? entriesOf(errors) : []
+
+  return (
+    <FormContext value={parts}>
+      <FormProvider {...form}>
+        <form noValidate onSubmit={(event) => void save(event)}>
+          {locked !== undefined && (
+            <div className="mb-5">
+              <Notice tone="warn" title="Locked">
+                {locked}
+              </Notice>
+            </div>
+          )}
+          {(entries.length > 0 || refusal) && (
+            <ErrorSummary
+              ref={summary}
+              message={refusal?.message ?? 'Some entries need attention.'}
+              requestId={refusal?.requestId}
+              entries={entries}
+            />
+          )}
+          <fieldset disabled={locked !== undefined} className="min-w-0">
+            <div className="flex flex-col gap-5">{props.children}</div>
+            {locked === undefined && (
+              <div className="mt-6 flex flex-wrap items-center gap-2.5">
+                <Button
+                  type="submit"
+                  kind={props.kind}
+                  busy={isSubmitting && (props.busyLabel ?? 'Saving…')}
+                >
+                  {props.submitLabel}
+                </Button>
+                {props.secondary}
+                {props.onCancel && (
+                  <Button kind="quiet" onClick={props.onCancel}>
+                    {props.cancelLabel ?? 'Cancel'}
+                  </Button>
+                )}
+              </div>
+            )}
+          </fieldset>
+        </form>
+      </FormProvider>
+    </FormContext>
+  )
+}
+
+function useFormPartsOnce() {
+  const id = useId()
+  return useState<FormParts>(() => ({
+    idOf: (name) => `${id}-${name}`,
+    labels: new Map(),
+    numberFields: new Set(),
+  }))
+}
+
+function fieldsOf(error: unknown): Record<string, string> {
+  return error instanceof ApiError ? (error.fields ?? {}) : {}
+}
+
+function refusalOf(error: unknown) {
+  if (error instanceof ApiError) return { message: error.message, requestId: error.requestId }
+  console.error(error)
+  return { message: 'Something went wrong in this page. Nothing was saved.' }
+}
+
+/** Flattens nested errors to the paths that fields are named by: "analytes.0.unit". */
+function entriesOf(errors: FieldErrors<FieldValues>, prefix = ''): SummaryEntry[] {
+  return Object.entries(errors).flatMap(([key, error]) => {
+    if (!error || typeof error !== 'object' || key === 'ref') return []
+    const name = prefix + key
+    if (typeof error.message === 'string') return [{ name, message: error.message }]
+    return entriesOf(error as FieldErrors<FieldValues>, `${name}.`)
+  })
+}
