@@ -1,0 +1,94 @@
+import { and, asc, count, desc, eq, gt, inArray, like, lt, or, type SQL, sql } from 'drizzle-orm'
+import type { Reader } from '#db/client.ts'
+import { imports } from '#db/schema/imports.ts'
+import { sessions } from '#db/schema/sessions.ts'
+import { sites } from '#db/schema/sites.ts'
+import { subjects } from '#db/schema/subjects.ts'
+import type { Allowed } from '#server/changes/targets.ts'
+import { AppError } from '#shared/errors/AppError.ts'
+import type { SubjectQuery } from '#shared/schemas/subject.ts'
+
+const columns = {
+  id: subjects.id,
+  code: subjects.code,
+  siteId: subjects.siteId,
+  siteName: sites.name,
+  sex: subjects.sex,
+  ageBand: subjects.ageBand,
+  enrolledAt: subjects.enrolledAt,
+  covariates: subjects.covariates,
+  importNumber: imports.number,
+  version: subjects.version,
+  sessionCount:
+    sql<number>`(select count(*) from ${sessions} where ${sessions.subjectId} = ${subjects.id})`.mapWith(
+      Number,
+    ),
+}
+export type SubjectRow = Awaited<ReturnType<typeof getSubject>>
+
+/** One subject. @throws AppError not-found */
+export async function getSubject(read: Reader, subjectId: string) {
+  const [row] = await read
+    .select(columns)
+    .from(subjects)
+    .innerJoin(sites, eq(sites.id, subjects.siteId))
+    .leftJoin(imports, eq(imports.id, subjects.importId))
+    .where(eq(subjects.id, subjectId))
+  if (!row) throw new AppError('not-found')
+  return row
+}
+
+/** A page of subjects of the sites that the reader may see, by key. */
+export async function listSubjects(read: Reader, allowed: Allowed, query: SubjectQuery) {
+  const limit = query.limit ?? 50
+  const order = query.order ?? 'code'
+  const backwards = query.descending === 'true'
+  const filter = and(
+    eq(subjects.studyId, allowed.studyId),
+    ofSites(allowed),
+    query.siteId ? eq(subjects.siteId, query.siteId) : undefined,
+    query.sex ? eq(subjects.sex, query.sex) : undefined,
+    query.code ? like(subjects.code, `${escaped(query.code.toUpperCase())}%`) : undefined,
+  )
+  const [totals] = await read.select({ total: count() }).from(subjects).where(filter)
+  const direction = backwards ? desc : asc
+  const rows = await read
+    .select(columns)
+    .from(subjects)
+    .innerJoin(sites, eq(sites.id, subjects.siteId))
+    .leftJoin(imports, eq(imports.id, subjects.importId))
+    .where(and(filter, query.after ? beyond(order, query.after, backwards) : undefined))
+    .orderBy(direction(subjects[order]), direction(subjects.code))
+    .limit(limit + 1)
+  const items = rows.slice(0, limit)
+  const last = items.at(-1)
+  return {
+    items,
+    total: totals?.total ?? 0,
+    next: rows.length > limit && last ? keyOf(order, last) : null,
+  }
+}
+
+/** Rows of the sites that a permit covers. */
+export function ofSites(allowed: Allowed): SQL | undefined {
+  return allowed.sites === 'all' ? undefined : inArray(subjects.siteId, [...allowed.sites])
+}
+
+/** Per cent and underscore stand for themselves. */
+const escaped = (text: string) => text.replace(/[\\%_]/g, '\\$&')
+
+const keyOf = (order: 'code' | 'enrolledAt', row: { code: string; enrolledAt: Date }) =>
+  order === 'code' ? row.code : `${row.enrolledAt.toISOString()} ${row.code}`
+
+function beyond(order: 'code' | 'enrolledAt', after: string, backwards: boolean): SQL | undefined {
+  const past = backwards ? lt : gt
+  if (order === 'code') return past(subjects.code, after)
+  const [instant = '', code = ''] = after.split(' ')
+  const at = new Date(instant)
+  if (Number.isNaN(at.getTime()))
+    throw new AppError('invalid', { fields: { after: 'This is not a key of a page.' } })
+  return or(
+    past(subjects.enrolledAt, at),
+    and(eq(subjects.enrolledAt, at), past(subjects.code, code)),
+  )
+}

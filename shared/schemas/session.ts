@@ -1,0 +1,17 @@
+import { z } from 'zod'
+import { id, instant, page, pageOf } from './common.ts'
+
+/** A breath session and the sensor's values in it. Class: index. */
+export const session = z.object({
+  id,
+  subjectId: id,
+  subjectCode: z.string(),
+  number: z.number().int(),
+  startedAt: instant.nullable(),
+  values: z.array(z.object({ analyteId: id, value: z.number(), belowLod: z.boolean() })),
+})
+export type Session = z.infer<typeof session>
+
+export const sessionQuery = page.extend({ code: z.string().trim().max(16).optional() })
+export type SessionQuery = z.infer<typeof sessionQuery>
+export const sessionPage = pageOf(session)

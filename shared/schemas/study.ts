@@ -1,0 +1,113 @@
+import { z } from 'zod'
+import { DUTIES, ROLES, STUDY_KINDS } from '#shared/policy/people.ts'
+import { caution, id, instant, words } from './common.ts'
+import { analyteInput, protocolDocument } from './protocol.ts'
+import { siteInput } from './site.ts'
+
+/** A study of earlier data as its lead sets it up, in one go: the study, its sites, analytes and protocol. */
+export const studyInput = z
+  .object({
+    id,
+    kind: z.literal('earlierData'),
+    code: z
+      .string()
+      .trim()
+      .regex(
+        /^[A-Z0-9][A-Z0-9-]{1,18}[A-Z0-9]$/,
+        'Three to 20 capital letters, digits or hyphens, such as LARK-2.',
+      ),
+    title: words(200),
+    sites: z.array(siteInput).min(1, 'At least one site.').max(100, 'At most 100.'),
+    analytes: z.array(analyteInput).min(1, 'At least one analyte.').max(40, 'At most 40.'),
+    document: protocolDocument,
+  })
+  .superRefine((study, context) => {
+    const unique = (values: string[], path: string, message: string) => {
+      values.forEach((value, index) => {
+        if (values.indexOf(value) !== index)
+          context.addIssue({
+            code: 'custom',
+            path: [path, index, path === 'sites' ? 'prefix' : 'key'],
+            message,
+          })
+      })
+    }
+    unique(
+      study.sites.map((site) => site.prefix),
+      'sites',
+      'Another site has this prefix.',
+    )
+    unique(
+      study.analytes.map((analyte) => analyte.key),
+      'analytes',
+      'This analyte is there already.',
+    )
+    const keys = study.analytes.map((analyte) => analyte.key)
+    study.document.biomarkers.forEach((biomarker, index) => {
+      if (!keys.includes(biomarker.analyteKey))
+        context.addIssue({
+          code: 'custom',
+          path: ['document', 'biomarkers', index, 'analyteKey'],
+          message: 'This analyte is not in the list.',
+        })
+    })
+    study.document.acceptanceLimits.forEach((limits, index) => {
+      if (!keys.includes(limits.analyteKey))
+        context.addIssue({
+          code: 'custom',
+          path: ['document', 'acceptanceLimits', index, 'analyteKey'],
+          message: 'This analyte is not in the list.',
+        })
+    })
+  })
+export type StudyInput = z.infer<typeof studyInput>
+
+/** The person's own lines of the team list: the browser asks the policy table with them. */
+export const viewer = z.array(
+  z.object({
+    role: z.enum(ROLES),
+    duty: z.enum(DUTIES as [string, ...string[]]).nullable(),
+    siteId: id.nullable(),
+  }),
+)
+
+export const studySummary = z.object({
+  id,
+  code: z.string(),
+  title: z.string(),
+  kind: z.enum(STUDY_KINDS),
+  demonstration: z.boolean(),
+  createdAt: instant,
+  lockedAt: instant.nullable(),
+  subjectCount: z.number().int(),
+  roles: z.array(z.enum(ROLES)),
+})
+export type StudySummary = z.infer<typeof studySummary>
+
+/** A study as its frame shows it: who the reader is in it, how far it is, and the caution to print. */
+export const study = z.object({
+  id,
+  code: z.string(),
+  title: z.string(),
+  kind: z.enum(STUDY_KINDS),
+  demonstration: z.boolean(),
+  createdAt: instant,
+  lockedAt: instant.nullable(),
+  releasedAt: instant.nullable(),
+  caution,
+  viewer,
+  /** Live counts for the course. Numbers of a class that the reader may not know are left out. */
+  counts: z.object({
+    protocolVersion: z.number().int(),
+    plannedSubjects: z.number().int().nullable(),
+    subjects: z.number().int(),
+    sessions: z.number().int(),
+    decidedOutcomes: z.number().int(),
+    auditEvents: z.number().int(),
+    locks: z.number().int(),
+    openLockRequest: z.boolean(),
+    analyses: z.number().int(),
+    reports: z.number().int(),
+  }),
+})
+export type Study = z.infer<typeof study>
