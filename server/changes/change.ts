@@ -82,6 +82,7 @@ async function foundStudy(
     siteId: null,
     kind: 'prospective',
     released: false,
+    lockedAt: null,
     memberships: [line],
     sites: 'all',
     line,

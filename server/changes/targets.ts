@@ -10,6 +10,7 @@ import { members } from '#db/schema/members.ts'
 import { reports } from '#db/schema/reports.ts'
 import { sites } from '#db/schema/sites.ts'
 import { studies } from '#db/schema/studies.ts'
+import { studyGuards } from '#db/schema/studyGuards.ts'
 import { subjects } from '#db/schema/subjects.ts'
 import { AppError } from '#shared/errors/AppError.ts'
 import type { Membership, StudyKind } from '#shared/policy/people.ts'
@@ -56,6 +57,7 @@ export type Allowed = {
   siteId: string | null
   kind: StudyKind
   released: boolean
+  lockedAt: Date | null
   memberships: Membership[]
   sites: Permit['sites']
   /** The line of the team list that the audit trail names. */
@@ -86,12 +88,14 @@ export async function findAllowed(
       startedBy: sql<string | null>`${target.startedBy ?? sql`null`}`,
       kind: study.kind,
       releasedAt: study.releasedAt,
+      lockedAt: studyGuards.lockedAt,
       role: line.role,
       duty: line.duty,
       siteId: line.siteId,
     })
     .from(target.table)
     .innerJoin(study, eq(study.id, target.studyId))
+    .innerJoin(studyGuards, eq(studyGuards.studyId, target.studyId))
     .innerJoin(line, eq(line.studyId, target.studyId))
     .where(
       and(
@@ -125,6 +129,7 @@ export async function findAllowed(
     siteId: found.recordSiteId,
     kind: found.kind,
     released,
+    lockedAt: found.lockedAt,
     memberships,
     sites: permit.sites,
     line: memberships.find((each) => permits(action, [each], circumstances)) ?? memberships[0]!,

@@ -6,6 +6,7 @@ import type { Actor } from '#server/changes/actor.ts'
 import { recordRefusedAttempt } from '#server/changes/change.ts'
 import { type Allowed, findAllowed, RefusedAttempt } from '#server/changes/targets.ts'
 import { AppError } from '#shared/errors/AppError.ts'
+import { policyRow } from '#shared/policy/permissions.ts'
 import { permitsInstallation } from '#shared/policy/permits.ts'
 import type { FileAnswer, Route } from './route.ts'
 import { receiveFile } from './upload.ts'
@@ -27,6 +28,7 @@ export function serve(app: Express, route: Route): void {
 async function answer(route: Route, request: Request, response: Response): Promise<void> {
   const actor = await signedInActor(request)
   const allowed = await admitted(route, request, actor)
+  refuseWhereLocked(route, allowed)
   const result = await route.handle({
     actor,
     allowed,
@@ -60,6 +62,13 @@ async function admitted(route: Route, request: Request, actor: Actor): Promise<A
       await recordRefusedAttempt(actor, error.studyId, error.action)
     throw error
   }
+}
+
+/** Says `locked` before anything else is found wrong; change() asks again where it counts. */
+function refuseWhereLocked(route: Route, allowed: Allowed | undefined): void {
+  const { effect, whenLocked } = policyRow(route.action)
+  if (effect === 'write' && whenLocked !== 'allow' && allowed?.lockedAt)
+    throw new AppError('locked')
 }
 
 function checked(schema: z.ZodType | undefined, value: unknown, where: string): unknown {
