@@ -126,13 +126,14 @@ export function makers(database: Database) {
       .where(eq(studyGuards.studyId, of.id))
   }
 
-  async function member(
-    of: { id: string },
-    options: { role: Role; duty?: Duty | null; site?: { id: string } | null; person?: TestPerson },
-  ): Promise<TestPerson> {
+  type Line = { role: Role; duty?: Duty | null; site?: { id: string } | null; person?: TestPerson }
+
+  /** A line of the team list, with its key and the person in it. */
+  async function memberLine(of: { id: string }, options: Line) {
     const who = options.person ?? (await person({ roles: [options.role] }))
+    const id = randomUUID()
     await database.insert(members).values({
-      id: randomUUID(),
+      id,
       studyId: of.id,
       createdAt: now(),
       personId: who.id,
@@ -141,7 +142,18 @@ export function makers(database: Database) {
       siteId: options.site?.id ?? null,
       startsAt: new Date(Date.now() - HOUR_MS),
     })
-    return who
+    return { id, person: who }
+  }
+
+  /** Somebody in the team of a study. */
+  const member = async (of: { id: string }, options: Line): Promise<TestPerson> =>
+    (await memberLine(of, options)).person
+
+  async function endLine(line: { id: string }): Promise<void> {
+    await database
+      .update(members)
+      .set({ endsAt: new Date(Date.now() - 1000) })
+      .where(eq(members.id, line.id))
   }
 
   async function subject(of: { id: string }, site: { id: string; prefix: string }) {
@@ -162,5 +174,5 @@ export function makers(database: Database) {
     return { ...row, version: 1 }
   }
 
-  return { person, study, lock, member, subject }
+  return { person, study, lock, member, memberLine, endLine, subject }
 }
