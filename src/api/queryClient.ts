@@ -14,9 +14,8 @@ const MAX_RETRIES = 2
 
 /** Asking again helps against a bad connection or a busy server, never against a refusal. */
 function mayHelpToRetry(failures: number, error: Error): boolean {
-  if (error instanceof ApiError && error.status >= 400 && error.status < 500) return false
-  if (error instanceof ApiError && error.code === 'unexpected-answer') return false
-  return failures < MAX_RETRIES
+  const answered = error instanceof ApiError && error.status > 0 && error.status < 500
+  return !answered && failures < MAX_RETRIES
 }
 
 export function createQueryClient(): QueryClient {

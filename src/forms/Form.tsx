@@ -37,13 +37,16 @@ type FormProps<S extends FormSchema, Answer> = {
   children: ReactNode
 }
 
+type Refusal = { message: string; requestId?: string }
+
 /** The one form: checks by schema, sums errors up, keeps what was typed, says why it is locked. */
 export function Form<S extends FormSchema, Answer>(props: FormProps<S, Answer>) {
   const { schema, locked, guard = true, onSubmit, onSaved } = props
   const [parts] = useFormPartsOnce()
   const summary = useRef<HTMLDivElement>(null)
-  const [refusals, setRefusals] = useState(0)
-  const [refusal, setRefusal] = useState<{ message: string; requestId?: string } | null>(null)
+  const [refused, setRefused] = useState(false)
+  const wantsFocus = useRef(false)
+  const [refusal, setRefusal] = useState<Refusal | null>(null)
 
   const form = useForm<z.input<S>, unknown, z.output<S>>({
     resolver: useMemo(() => formResolver(schema, parts.numberFields), [schema, parts]),
@@ -53,9 +56,17 @@ export function Form<S extends FormSchema, Answer>(props: FormProps<S, Answer>) 
   const { errors, isDirty, isSubmitting } = form.formState
   const letGo = useUnsavedWork(guard && isDirty && locked === undefined)
 
+  // After every commit: the errors of a refused form arrive one commit later than the refusal.
   useEffect(() => {
-    if (refusals > 0) summary.current?.focus()
-  }, [refusals])
+    if (!wantsFocus.current || !summary.current) return
+    wantsFocus.current = false
+    summary.current.focus()
+  })
+  const showRefusal = (whole: Refusal | null) => {
+    wantsFocus.current = true
+    setRefused(true)
+    setRefusal(whole)
+  }
 
   const save = form.handleSubmit(
     async (values) => {
@@ -69,16 +80,12 @@ export function Form<S extends FormSchema, Answer>(props: FormProps<S, Answer>) 
         for (const [name, message] of Object.entries(fieldsOf(error))) {
           form.setError(name as Path<z.input<S>>, { type: 'server', message })
         }
-        setRefusal(refusalOf(error))
-        setRefusals((count) => count + 1)
+        showRefusal(refusalOf(error))
       }
     },
-    () => {
-      setRefusal(null)
-      setRefusals((count) => count + 1)
-    },
+    () => showRefusal(null),
   )
-  const entries = refusals > 0 ? entriesOf(errors) : []
+  const entries = refused ? entriesOf(errors) : []
 
   return (
     <FormContext value={parts}>
@@ -138,7 +145,7 @@ function fieldsOf(error: unknown): Record<string, string> {
   return error instanceof ApiError ? (error.fields ?? {}) : {}
 }
 
-function refusalOf(error: unknown) {
+function refusalOf(error: unknown): Refusal {
   if (error instanceof ApiError) return { message: error.message, requestId: error.requestId }
   console.error(error)
   return { message: 'Something went wrong in this page. Nothing was saved.' }

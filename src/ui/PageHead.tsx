@@ -16,7 +16,7 @@ export function PageHead({ title, sub, actions, back }: PageHeadProps) {
   }, [title])
   return (
     <div className="mb-4 flex flex-wrap items-end gap-x-4 gap-y-3">
-      <div className="min-w-0">
+      <div className="min-w-0 max-wide:basis-full">
         {back && (
           <Link to={back.to} className="link mb-1 inline-block text-sm print:hidden">
             {back.label}

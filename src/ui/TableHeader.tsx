@@ -35,7 +35,7 @@ export function TableHeader<Row extends RowData>({
           aria-sort={ariaSort(header.column.getIsSorted())}
           className={classes(
             look,
-            header.column.columnDef.meta?.numeric ? 'text-right' : 'text-left',
+            header.column.columnDef.meta?.numeric ? 'pr-6 text-right last:pr-2.5' : 'text-left',
           )}
         >
           <HeaderContent header={header} />
@@ -44,6 +44,9 @@ export function TableHeader<Row extends RowData>({
     </tr>
   )
 }
+
+/** One height for headers with and without a button, so that they share a line. */
+const LINE = 'inline-flex min-h-6 items-center align-bottom'
 
 function HeaderContent<Row extends RowData>({
   header,
@@ -58,13 +61,18 @@ function HeaderContent<Row extends RowData>({
       </span>
     )
   }
-  if (!column.getCanSort()) return <FlexRender header={header} />
+  if (!column.getCanSort())
+    return (
+      <span className={LINE}>
+        <FlexRender header={header} />
+      </span>
+    )
   const sorted = column.getIsSorted()
   return (
     <button
       type="button"
       onClick={column.getToggleSortingHandler()}
-      className="group inline-flex min-h-6 items-center gap-1.5 font-semibold hover:text-spruce"
+      className={classes(LINE, 'group gap-1.5 font-semibold hover:text-spruce')}
     >
       <FlexRender header={header} />
       <svg

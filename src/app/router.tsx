@@ -1,0 +1,68 @@
+import type { ComponentType } from 'react'
+import { createBrowserRouter, Navigate, type RouteObject } from 'react-router-dom'
+import { NotFound } from './NotFound.tsx'
+import { PageError } from './PageError.tsx'
+import { PlainFrame } from './PlainFrame.tsx'
+import { Root } from './Root.tsx'
+import { SignedInAgain } from './SignedInAgain.tsx'
+import { SignedInOnly } from './SignedInOnly.tsx'
+import { StudyFrame } from './StudyFrame.tsx'
+import { SIGNED_IN_PATH } from './signIn.ts'
+
+/** Pages outside of any study. */
+const PLAIN_PAGES: RouteObject[] = []
+
+/** Pages of a study; the first part of the path names its station. */
+const STUDY_PAGES: RouteObject[] = []
+
+const builtStations = new Set(STUDY_PAGES.map((route) => route.path?.split('/')[0] ?? ''))
+const firstStation = STUDY_PAGES[0]?.path
+
+const routes: RouteObject[] = [
+  {
+    element: <Root />,
+    errorElement: <PageError />,
+    children: [
+      { path: SIGNED_IN_PATH, element: <SignedInAgain /> },
+      {
+        element: <SignedInOnly />,
+        children: [
+          {
+            element: <PlainFrame />,
+            children: [
+              {
+                errorElement: <PageError />,
+                children: [...PLAIN_PAGES, { path: '*', element: <NotFound /> }],
+              },
+            ],
+          },
+          {
+            path: 'studies/:studyId',
+            element: <StudyFrame built={builtStations} />,
+            children: [
+              {
+                errorElement: <PageError />,
+                children: [
+                  ...(firstStation
+                    ? [{ index: true, element: <Navigate to={firstStation} replace /> }]
+                    : []),
+                  ...STUDY_PAGES,
+                  { path: '*', element: <NotFound /> },
+                ],
+              },
+            ],
+          },
+        ],
+      },
+    ],
+  },
+]
+
+export function createRouter() {
+  return createBrowserRouter(routes)
+}
+
+/** A page is loaded when somebody goes there. Each page file has one default export. */
+export function page(load: () => Promise<{ default: ComponentType }>): RouteObject['lazy'] {
+  return async () => ({ Component: (await load()).default })
+}
