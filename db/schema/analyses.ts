@@ -5,6 +5,7 @@ import {
   json,
   mysqlEnum,
   mysqlTable,
+  uniqueIndex,
   varchar,
 } from 'drizzle-orm/mysql-core'
 import type { AnalysisParameters } from '#shared/schemas/analysis.ts'
@@ -34,7 +35,7 @@ export const analyses = mysqlTable(
     runAt: instant('run_at').notNull(),
   },
   (t) => [
-    index('analyses_study').on(t.studyId, t.number),
+    uniqueIndex('analyses_number').on(t.studyId, t.number),
     index('analyses_dataset').on(t.datasetId),
   ],
 )

@@ -1,4 +1,4 @@
-import { index, int, json, mysqlEnum, mysqlTable, varchar } from 'drizzle-orm/mysql-core'
+import { int, json, mysqlEnum, mysqlTable, uniqueIndex, varchar } from 'drizzle-orm/mysql-core'
 import type { LockCheck } from '#shared/schemas/lock.ts'
 import { LOCK_KINDS, LOCK_STATES } from '#shared/terms/lockState.ts'
 import { instant, recordColumns, uuid } from './columns.ts'
@@ -22,5 +22,5 @@ export const locks = mysqlTable(
     datasetId: uuid('dataset_id'),
     signatureId: uuid('signature_id'),
   },
-  (t) => [index('locks_study').on(t.studyId, t.number)],
+  (t) => [uniqueIndex('locks_number').on(t.studyId, t.number)],
 )

@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { LEFT_OUT_REASONS, SESSION_RULES } from '#shared/terms/analysis.ts'
 import { LOCK_KINDS } from '#shared/terms/lockState.ts'
 import { OUTCOMES } from '#shared/terms/outcome.ts'
 import { AGE_BANDS, SEXES } from '#shared/terms/subject.ts'
@@ -39,24 +40,86 @@ export const datasetManifest = z.object({
 })
 export type DatasetManifest = z.infer<typeof datasetManifest>
 
-export const dataset = z.object({
+/** A dataset in a list: enough to choose it by. */
+export const datasetSummary = z.object({
   id,
+  lockKind: z.enum(LOCK_KINDS),
+  lockNumber: z.number().int(),
   frozenAt: instant,
   hash: z.string(),
   subjectCount: z.number().int(),
   rowCount: z.number().int(),
+})
+export type DatasetSummary = z.infer<typeof datasetSummary>
+
+export const dataset = datasetSummary.extend({
   manifest: datasetManifest,
+  /** The protocol version that stood when the data were frozen. */
   protocol: protocolDocument,
   caution,
 })
 export type Dataset = z.infer<typeof dataset>
 
+const count = z.number().int().nonnegative()
+const leftOut = z.array(z.object({ reason: z.enum(LEFT_OUT_REASONS), subjects: count }))
+
+/** Who is counted in an accuracy analysis, and who is not and why; every subject once. */
+export const accuracyCounts = z.object({
+  subjects: count,
+  present: count,
+  absent: count,
+  /** Sensor values that went in; more than subjects where every session counts. */
+  values: count,
+  /** Counted subjects with more than one valid value. */
+  severalSessions: count,
+  /** Values below the limit of detection that went in as they were given. */
+  belowLod: count,
+  leftOut,
+})
+export type AccuracyCounts = z.infer<typeof accuracyCounts>
+
 /** The numbers of one analyte by outcome, for moving a cut-off in the browser. */
 export const datasetValues = z.object({
   analyteKey: z.string(),
   unit: z.string(),
+  sessionRule: z.enum(SESSION_RULES),
   present: z.array(z.number()),
   absent: z.array(z.number()),
+  /** Which subject each value came from, where some subject has several in it; else null. */
+  presentSubjects: z.array(z.number().int()).nullable(),
+  absentSubjects: z.array(z.number().int()).nullable(),
+  counts: accuracyCounts,
   caution,
 })
 export type DatasetValues = z.infer<typeof datasetValues>
+
+export const datasetValuesQuery = z.object({
+  analyteKey: z.string({ error: 'Please choose an analyte.' }).max(40),
+  sessionRule: z.enum(SESSION_RULES).default('every'),
+})
+
+/** Who is counted in an agreement analysis, and who is not and why; every subject once. */
+export const agreementCounts = z.object({
+  subjects: count,
+  counted: count,
+  pairs: count,
+  /** Counted subjects with more than one session that holds both values. */
+  severalSessions: count,
+  belowLod: count,
+  leftOut,
+})
+export type AgreementCounts = z.infer<typeof agreementCounts>
+
+/** Sensor and reference analyser value of one analyte, pair by pair. */
+export const datasetPairs = z.object({
+  analyteKey: z.string(),
+  unit: z.string(),
+  sessionRule: z.enum(SESSION_RULES),
+  sensor: z.array(z.number()),
+  reference: z.array(z.number()),
+  /** Subject code of each pair. */
+  subjects: z.array(z.string()),
+  counts: agreementCounts,
+  caution,
+})
+export type DatasetPairs = z.infer<typeof datasetPairs>

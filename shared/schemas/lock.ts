@@ -1,15 +1,16 @@
 import { z } from 'zod'
-import { LOCK_KINDS, LOCK_STATES } from '#shared/terms/lockState.ts'
-import { id, instant, words } from './common.ts'
+import { LOCK_CHECKS, LOCK_KINDS, LOCK_STATES } from '#shared/terms/lockState.ts'
+import { caution, id, instant, reasonForChange, words } from './common.ts'
 
 /** One line of the checklist, computed when it is looked at. */
 export const lockCheck = z.object({
-  key: z.string(),
+  key: z.enum(LOCK_CHECKS),
   label: z.string(),
   /** What still stands in the way, or is worth knowing. */
   left: z.number().int(),
   /** A blocking check must be at 0 before the lock can be approved. */
   blocking: z.boolean(),
+  /** How it stands, in a few words. */
   detail: z.string(),
 })
 export type LockCheck = z.infer<typeof lockCheck>
@@ -48,10 +49,14 @@ export const lockPage = z.object({
   checklist: z.array(lockCheck),
   auditCount: z.number().int(),
   auditHeadHash: z.string(),
+  caution,
   locks: z.array(lock),
 })
+export type LockPage = z.infer<typeof lockPage>
 
 export const lockRequest = z.object({ id, note: words(500).optional() })
-export const lockWithdrawal = z.object({ reasonForChange: words(500), version: z.number().int() })
-export const lockReturn = lockWithdrawal
-export const lockApproval = z.object({ reasonForChange: words(500), version: z.number().int() })
+export type LockRequest = z.infer<typeof lockRequest>
+
+/** Withdraws, sends back or approves: why, and which version of the request the person saw. */
+export const lockDecision = z.object({ reasonForChange, version: z.number().int() })
+export type LockDecision = z.infer<typeof lockDecision>

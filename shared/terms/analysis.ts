@@ -12,3 +12,106 @@ export const ANALYSIS_BADGE_LABELS: Record<AnalysisBadge, string> = {
   plannedAmended: 'Planned, amended after interim',
   exploratory: 'Exploratory',
 }
+
+/** Why an analysis of earlier data can be nothing but exploratory. */
+export const EARLIER_DATA_BADGE_REASON =
+  'Exploratory: the data of this study had been seen before any plan for their analysis was signed.'
+
+/** Several sessions of a subject: all of them with the subject as one cluster, or one value by a rule. */
+export const SESSION_RULES = ['every', 'first', 'mean', 'median'] as const
+export type SessionRule = (typeof SESSION_RULES)[number]
+export const SESSION_RULE_LABELS: Record<SessionRule, string> = {
+  every: 'Every session, subjects as clusters',
+  first: 'First session of each subject',
+  mean: 'Mean of each subject’s sessions',
+  median: 'Median of each subject’s sessions',
+}
+
+/** Why a subject of the dataset is not counted in an analysis; the first that applies. */
+export const LEFT_OUT_REASONS = [
+  'noOutcome',
+  'notDone',
+  'indeterminate',
+  'noValuePresent',
+  'noValueAbsent',
+  'neitherValue',
+  'noSensorValue',
+  'noReferenceValue',
+  'notInOneSession',
+] as const
+export type LeftOutReason = (typeof LEFT_OUT_REASONS)[number]
+export const LEFT_OUT_LABELS: Record<LeftOutReason, string> = {
+  noOutcome: 'No reference outcome recorded',
+  notDone: 'Reference not done',
+  indeterminate: 'Reference outcome indeterminate',
+  noValuePresent: 'Condition present, no valid sensor value',
+  noValueAbsent: 'Condition absent, no valid sensor value',
+  neitherValue: 'Neither a sensor nor a reference value',
+  noSensorValue: 'No sensor value',
+  noReferenceValue: 'No reference analyser value',
+  notInOneSession: 'Sensor and reference value never in one session',
+}
+
+/** Ways to choose a cut-off from the data themselves; what they find is exploratory. */
+export const CUT_OFF_RULES = [
+  'youden',
+  'closestToCorner',
+  'sensitivityAtLeast',
+  'specificityAtLeast',
+] as const
+export type CutOffRule = (typeof CUT_OFF_RULES)[number]
+export const CUT_OFF_RULE_LABELS: Record<CutOffRule, string> = {
+  youden: 'Youden',
+  closestToCorner: 'closest to corner',
+  sensitivityAtLeast: 'sensitivity ≥ 0.90',
+  specificityAtLeast: 'specificity ≥ 0.90',
+}
+export const CHOSEN_FROM_DATA = 'Chosen from these data, so exploratory'
+
+/** What a two-by-two table tells, in the order in which it is shown. */
+export const MEASURES = [
+  'sensitivity',
+  'specificity',
+  'likelihoodRatioPositive',
+  'likelihoodRatioNegative',
+  'diagnosticOddsRatio',
+  'positivePredictiveValueObserved',
+  'negativePredictiveValueObserved',
+  'positivePredictiveValueAtPrevalence',
+  'negativePredictiveValueAtPrevalence',
+] as const
+export type Measure = (typeof MEASURES)[number]
+
+/** Label of a measure; the stated prevalence stands in the label of the values that hang on it. */
+export function measureLabel(measure: Measure, prevalence: number | null): string {
+  const stated = prevalenceText(prevalence ?? 0)
+  return {
+    sensitivity: 'Sensitivity',
+    specificity: 'Specificity',
+    likelihoodRatioPositive: 'Likelihood ratio +',
+    likelihoodRatioNegative: 'Likelihood ratio −',
+    diagnosticOddsRatio: 'Diagnostic odds ratio',
+    positivePredictiveValueObserved: 'PPV as observed',
+    negativePredictiveValueObserved: 'NPV as observed',
+    positivePredictiveValueAtPrevalence: `PPV at prevalence ${stated}`,
+    negativePredictiveValueAtPrevalence: `NPV at prevalence ${stated}`,
+  }[measure]
+}
+
+/** 0.2 as 0.20, and 0.005 as it is. */
+function prevalenceText(prevalence: number): string {
+  const plain = String(prevalence)
+  return plain.length < 4 ? prevalence.toFixed(2) : plain
+}
+
+/** How limits of agreement stand to the limits that were agreed to be acceptable. */
+export const ACCEPTANCE_VERDICTS = ['within', 'notShown', 'beyond'] as const
+export type AcceptanceVerdict = (typeof ACCEPTANCE_VERDICTS)[number]
+export const ACCEPTANCE_VERDICT_WORDS: Record<AcceptanceVerdict, string> = {
+  within:
+    'Both limits of agreement and their intervals lie within the acceptance limits: the sensor agrees closely enough.',
+  notShown:
+    'Both limits of agreement lie within the acceptance limits, but an interval reaches beyond them: with this number of pairs it is not shown that the sensor agrees closely enough.',
+  beyond:
+    'A limit of agreement lies beyond the acceptance limits: the sensor does not agree closely enough.',
+}

@@ -11,3 +11,20 @@ export const LOCK_STATE_LABELS: Record<LockState, string> = {
   withdrawn: 'Withdrawn',
   approved: 'Approved',
 }
+
+/** What the signature under a final lock means; shown before it is given and stored with it. */
+export const LOCK_APPROVAL_MEANING =
+  'I approve the final lock: these data are frozen as they stand, and nobody can change them.'
+
+/** Questions that the checklist asks before a lock, in the order in which they are shown. */
+export const LOCK_CHECKS = [
+  'subjects',
+  'imports',
+  'sensorValues',
+  'outcomes',
+  'indeterminateOutcomes',
+  'referenceValues',
+  'analytes',
+  'refusedRows',
+] as const
+export type LockCheckKey = (typeof LOCK_CHECKS)[number]
