@@ -3,7 +3,7 @@ import { uuid } from './columns.ts'
 
 const mediumblob = customType<{ data: Buffer }>({ dataType: () => 'mediumblob' })
 
-/** The uploaded bytes in pieces below the packet limit; removed when the import is discarded. */
+/** The uploaded bytes in pieces below the packet limit; removed when the import is entered or discarded. */
 export const importChunks = mysqlTable(
   'import_chunks',
   {

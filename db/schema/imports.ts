@@ -1,4 +1,4 @@
-import { index, int, json, mysqlEnum, mysqlTable } from 'drizzle-orm/mysql-core'
+import { int, json, mysqlEnum, mysqlTable, uniqueIndex } from 'drizzle-orm/mysql-core'
 import type {
   ImportColumn,
   ImportCounts,
@@ -25,5 +25,5 @@ export const imports = mysqlTable(
     uploadedBy: uuid('uploaded_by').notNull(),
     enteredAt: instant('entered_at'),
   },
-  (t) => [index('imports_study').on(t.studyId, t.number)],
+  (t) => [uniqueIndex('imports_number').on(t.studyId, t.number)],
 )
