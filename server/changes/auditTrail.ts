@@ -161,7 +161,7 @@ function eventRow(
 }
 
 /** Index and reference in one event make it linked. */
-function widest(classes: readonly InformationClass[]): InformationClass {
+export function widest(classes: readonly InformationClass[]): InformationClass {
   if (classes.includes('index') && classes.includes('reference')) return 'linked'
   return [...INFORMATION_CLASSES].reverse().find((each) => classes.includes(each)) ?? 'none'
 }

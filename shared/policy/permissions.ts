@@ -13,9 +13,9 @@ export type PolicyRow = {
   effect: 'read' | 'list' | 'write'
   grants: readonly Grant[]
   reveals: InformationClass
-  /** Writes only: what a locked study does with it. */
+  /** Writes, and reads that go on record: what a locked study does with it. */
   whenLocked?: 'refuse' | 'allow'
-  /** Writes only: the audit event, past tense. */
+  /** Writes, and reads that go on record: the audit event, past tense. */
   records?: string
   /** Writes that end all other writing take the study's guard for themselves. */
   guard?: 'exclusive'
@@ -257,18 +257,41 @@ export const POLICY = {
   },
 
   'report.list': { effect: 'read', grants: team, reveals: 'none' },
-  'report.readOpen': { effect: 'read', grants: team, reveals: 'none' },
+  'report.readOpen': {
+    effect: 'read',
+    grants: team,
+    reveals: 'none',
+    whenLocked: 'allow',
+    records: 'report.openPartOpened',
+  },
   'report.readClosed': {
     effect: 'read',
     grants: [oversight('study'), analyst('study')],
     reveals: 'linked',
+    whenLocked: 'allow',
+    records: 'report.closedPartOpened',
   },
   'report.issue': {
     effect: 'write',
     grants: [analyst('study')],
     reveals: 'linked',
     whenLocked: 'allow',
+    records: 'report.requested',
+  },
+  // What the job does on behalf of the person who asked.
+  'report.store': {
+    effect: 'write',
+    grants: [analyst('study')],
+    reveals: 'linked',
+    whenLocked: 'allow',
     records: 'report.issued',
+  },
+  'report.fail': {
+    effect: 'write',
+    grants: [analyst('study')],
+    reveals: 'none',
+    whenLocked: 'allow',
+    records: 'report.failed',
   },
 
   'auditEvent.list': {
