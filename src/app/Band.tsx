@@ -1,7 +1,8 @@
-import { useQuery } from '@tanstack/react-query'
+import { useMutation, useQuery } from '@tanstack/react-query'
 import { Link } from 'react-router-dom'
 import type { Role } from '#shared/policy/people.ts'
 import { meQuery } from '../api/me.ts'
+import { signOut } from '../api/signOut.ts'
 import { BreathMark } from './BreathMark.tsx'
 import { useNightTheme } from './nightTheme.ts'
 import { SavedState } from './SavedState.tsx'
@@ -22,6 +23,7 @@ const ROLE_WORDS: Record<Role, string> = {
 export function Band({ study, roles }: BandProps) {
   const me = useQuery(meQuery)
   const [night, setNight] = useNightTheme()
+  const leave = useMutation({ mutationFn: signOut, meta: { quiet: true } })
   return (
     <header className="flex min-h-12 flex-wrap items-center gap-x-5 gap-y-1.5 bg-band px-7 py-2 text-band-ink max-wide:px-4 print:hidden [&_:focus-visible]:outline-band-ink">
       <Link
@@ -57,11 +59,14 @@ export function Band({ study, roles }: BandProps) {
           {night ? 'Day' : 'Night'}
           <span className="sr-only"> colours</span>
         </button>
-        <form method="post" action="/auth/logout">
-          <button type="submit" className="min-h-6 text-band-ink underline underline-offset-2">
-            Sign out
-          </button>
-        </form>
+        <button
+          type="button"
+          onClick={() => leave.mutate()}
+          disabled={leave.isPending}
+          className="min-h-6 text-band-ink underline underline-offset-2"
+        >
+          {leave.isError ? 'Sign out: try again' : 'Sign out'}
+        </button>
       </div>
     </header>
   )

@@ -2,6 +2,7 @@ import { useLocation } from 'react-router-dom'
 import { CAUTIONS } from '#shared/terms/cautions.ts'
 import { ButtonLink } from '../ui/ButtonLink.tsx'
 import { Caution } from '../ui/Caution.tsx'
+import { Notice } from '../ui/Notice.tsx'
 import { BreathMark } from './BreathMark.tsx'
 import { COURSE_HEIGHT_PX, COURSE_WIDTH, courseCurve } from './courseCurve.ts'
 import { signInAddress } from './signIn.ts'
@@ -9,6 +10,8 @@ import { signInAddress } from './signIn.ts'
 /** What somebody sees who is not signed in. */
 export function Landing() {
   const { pathname, search } = useLocation()
+  const params = new URLSearchParams(search)
+  const refused = params.get('signIn') === 'refused'
   const { path } = courseCurve(8, 5)
   const { title, text } = CAUTIONS.researchUse
   return (
@@ -37,8 +40,16 @@ export function Landing() {
           For hospital teams who find out whether a breath-gas sensor can tell disease from health,
           and whether it reads the same as a laboratory analyser.
         </p>
+        {refused && (
+          <div className="mb-6 max-w-[60ch]">
+            <Notice tone="stop" title="You were not signed in" announce>
+              The sign-in was not completed, so nobody was let in. Please try again. When it happens
+              again, report the number <code className="font-mono">{params.get('request')}</code>.
+            </Notice>
+          </div>
+        )}
         <div className="mb-10">
-          <ButtonLink href={signInAddress(pathname + search)} size="large">
+          <ButtonLink href={signInAddress(refused ? '/' : pathname + search)} size="large">
             Sign in with your hospital account
           </ButtonLink>
         </div>

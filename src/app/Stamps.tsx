@@ -2,13 +2,15 @@
 export function Stamps({ texts }: { texts: readonly string[] }) {
   if (texts.length === 0) return null
   return (
-    <ul
+    <section
       aria-label="About this study"
-      className="flex flex-wrap gap-x-8 gap-y-0.5 border-b border-rule bg-warn-2 px-7 py-1.5 text-sm text-warn-ink max-wide:px-4 print:border print:border-rule-2"
+      className="border-b border-rule bg-warn-2 px-7 py-1.5 text-sm text-warn-ink max-wide:px-4 print:border print:border-rule-2"
     >
-      {texts.map((text) => (
-        <li key={text}>{text}</li>
-      ))}
-    </ul>
+      <ul className="flex flex-wrap gap-x-8 gap-y-0.5">
+        {texts.map((text) => (
+          <li key={text}>{text}</li>
+        ))}
+      </ul>
+    </section>
   )
 }

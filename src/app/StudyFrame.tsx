@@ -45,10 +45,7 @@ export function StudyFrame({ built }: { built: ReadonlySet<string> }) {
   return (
     <Frame
       band={
-        <Band
-          study={{ ...study.data, to: `/studies/${studyId}/protocol` }}
-          roles={rolesIn(study.data)}
-        />
+        <Band study={{ ...study.data, to: `/studies/${studyId}` }} roles={rolesIn(study.data)} />
       }
       course={
         <Course

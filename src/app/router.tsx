@@ -16,12 +16,16 @@ const PLAIN_PAGES: RouteObject[] = []
 const STUDY_PAGES: RouteObject[] = []
 
 const builtStations = new Set(STUDY_PAGES.map((route) => route.path?.split('/')[0] ?? ''))
-const firstStation = STUDY_PAGES[0]?.path
+const firstPage = STUDY_PAGES.find((route) => route.path && !route.path.includes(':'))?.path
 
 const routes: RouteObject[] = [
   {
     element: <Root />,
-    errorElement: <PageError />,
+    errorElement: (
+      <main className="p-7">
+        <PageError />
+      </main>
+    ),
     children: [
       { path: SIGNED_IN_PATH, element: <SignedInAgain /> },
       {
@@ -43,8 +47,8 @@ const routes: RouteObject[] = [
               {
                 errorElement: <PageError />,
                 children: [
-                  ...(firstStation
-                    ? [{ index: true, element: <Navigate to={firstStation} replace /> }]
+                  ...(firstPage
+                    ? [{ index: true, element: <Navigate to={firstPage} replace /> }]
                     : []),
                   ...STUDY_PAGES,
                   { path: '*', element: <NotFound /> },

@@ -12,7 +12,7 @@ const FORMATS: Record<string, string> = {
 
 /** Says in plain words what a schema refuses; a schema's own sentence comes before it. */
 export function plainIssue(issue: Issue): string {
-  if (isBlank(issue.input)) return 'Fill this in.'
+  if (isBlank(issue.input)) return issue.code === 'invalid_value' ? 'Choose one.' : 'Fill this in.'
   switch (issue.code) {
     case 'invalid_type':
       return wrongType(issue.expected)

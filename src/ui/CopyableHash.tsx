@@ -19,7 +19,7 @@ export function CopyableHash({ value, label }: { value: string; label: string })
   }
   return (
     <span className="inline-flex flex-wrap items-baseline gap-x-2">
-      <code className="font-mono" title={value}>
+      <code className="font-mono print:hidden" title={value}>
         {inGroups(value.slice(0, SHOWN_DIGITS))}
         {value.length > SHOWN_DIGITS && ' …'}
       </code>

@@ -37,7 +37,7 @@ export function Dialog({ open, title, onClose, children, actions, wide = false }
         if (event.target === ref.current && open) onClose()
       }}
       className={classes(
-        'm-auto max-h-[calc(100dvh-32px)] w-[calc(100%-32px)] overflow-y-auto rounded border border-rule-2 border-l-copper bg-sheet p-0 text-ink shadow-[0_12px_40px_rgb(0_0_0/0.25)] backdrop:bg-[rgb(7_15_16/0.55)]',
+        'm-auto max-h-[calc(100dvh-32px)] w-[calc(100%-32px)] overflow-y-auto rounded border border-rule-2 bg-sheet p-0 text-ink shadow-[0_12px_40px_rgb(0_0_0/0.25)] backdrop:bg-[rgb(7_15_16/0.55)]',
         wide ? 'max-w-3xl' : 'max-w-lg',
       )}
     >
