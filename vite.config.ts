@@ -15,6 +15,7 @@ export default defineConfig({
   build: { outDir: 'dist/client', sourcemap: true },
   test: {
     include: ['tests/**/*.test.{ts,tsx}'],
+    globalSetup: ['tests/support/globalSetup.ts'],
     testTimeout: 30_000,
     hookTimeout: 60_000,
   },

@@ -14,11 +14,6 @@ function provider(): Promise<oidc.Configuration> {
   return discovered
 }
 
-/** Forgets the provider's description, so that a process can meet another one. */
-export function forgetProvider(): void {
-  discovered = undefined
-}
-
 function discover(): Promise<oidc.Configuration> {
   const { BREATHMARK_OIDC_ISSUER, BREATHMARK_OIDC_CLIENT_ID, BREATHMARK_OIDC_CLIENT_SECRET } =
     config()
@@ -30,8 +25,12 @@ function discover(): Promise<oidc.Configuration> {
     BREATHMARK_OIDC_CLIENT_SECRET,
     undefined,
     {
-      // Only a provider on this very machine may be spoken to without TLS.
-      execute: loopback ? [oidc.allowInsecureRequests] : [],
+      execute: [
+        // Signatures of tokens are checked even though they come straight from the provider.
+        oidc.enableNonRepudiationChecks,
+        // Only a provider on this very machine may be spoken to without TLS.
+        ...(loopback ? [oidc.allowInsecureRequests] : []),
+      ],
       timeout: 10,
     },
   )

@@ -1,11 +1,13 @@
 import { randomBytes, randomUUID } from 'node:crypto'
-import { asc, eq } from 'drizzle-orm'
+import { asc, eq, sql } from 'drizzle-orm'
 import { drizzle } from 'drizzle-orm/mysql2'
 import type { Express } from 'express'
 import mysql from 'mysql2/promise'
 import request, { type Test } from 'supertest'
 import { connectDatabase, type Database, disconnectDatabase } from '#db/client.ts'
 import { auditEvents } from '#db/schema/auditEvents.ts'
+import { logins } from '#db/schema/logins.ts'
+import { people } from '#db/schema/people.ts'
 import { createApp } from '#server/app.ts'
 import { readConfig, setConfig } from '#server/config.ts'
 import { JOB_HANDLERS } from '#server/jobHandlers.ts'
@@ -22,7 +24,7 @@ export type Client = Record<'get' | 'post' | 'put' | 'patch' | 'delete', (path: 
  * The real application on a database of its own. The fixtures write with the migration account, as
  * a hospital's database would have been filled before; everything under test goes through HTTP.
  */
-export async function startApi() {
+export async function startApi(environment: Record<string, string> = {}) {
   const database = await freshDatabase()
   setConfig(
     readConfig({
@@ -36,6 +38,7 @@ export async function startApi() {
       BREATHMARK_MAIL_FROM: 'breathmark@hospital.example',
       BREATHMARK_SECRET: randomBytes(32).toString('hex'),
       BREATHMARK_REQUESTS_PER_MINUTE: '999999',
+      ...environment,
     }),
   )
   connectDatabase(database.appUrl)
@@ -54,6 +57,14 @@ export async function startApi() {
     runJobs: async () => {
       while (await runNextJob(JOB_HANDLERS));
     },
+    /** Makes every login older by so many minutes in one respect. */
+    age: (column: 'lastSeenAt' | 'endsAt', minutes: number) =>
+      fixtures
+        .update(logins)
+        .set({ [column]: sql`${logins[column]} - interval ${sql.raw(String(minutes))} minute` }),
+    /** What the hospital's administration does when somebody leaves. */
+    disable: (name: string) =>
+      fixtures.update(people).set({ disabled: true }).where(eq(people.name, name)),
     auditEvents: (chainId: string) =>
       fixtures
         .select()
