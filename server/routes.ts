@@ -1,6 +1,25 @@
+import { analyteRoutes } from './features/analytes/analytes.routes.ts'
+import { auditEventRoutes } from './features/auditEvents/auditEvents.routes.ts'
 import { meRoutes } from './features/me/me.routes.ts'
+import { memberRoutes } from './features/members/members.routes.ts'
+import { protocolRoutes } from './features/protocol/protocol.routes.ts'
+import { referenceRoutes } from './features/reference/reference.routes.ts'
+import { sessionRoutes } from './features/sessions/sessions.routes.ts'
+import { siteRoutes } from './features/sites/sites.routes.ts'
+import { studyRoutes } from './features/studies/studies.routes.ts'
 import { subjectRoutes } from './features/subjects/subjects.routes.ts'
 import type { Route } from './http/route.ts'
 
 /** Every route of the API. The permission test walks this list. */
-export const ROUTES: readonly Route[] = [...meRoutes, ...subjectRoutes]
+export const ROUTES: readonly Route[] = [
+  ...auditEventRoutes,
+  ...meRoutes,
+  ...analyteRoutes,
+  ...memberRoutes,
+  ...protocolRoutes,
+  ...referenceRoutes,
+  ...sessionRoutes,
+  ...siteRoutes,
+  ...studyRoutes,
+  ...subjectRoutes,
+]

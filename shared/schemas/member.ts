@@ -23,6 +23,12 @@ export const memberInput = z
       })
     if (line.duty && SITE_DUTIES.includes(line.duty) && line.siteId === null)
       context.addIssue({ code: 'custom', path: ['siteId'], message: 'Please choose the site.' })
+    if (line.duty === 'studyLead' && line.siteId !== null)
+      context.addIssue({
+        code: 'custom',
+        path: ['siteId'],
+        message: 'A study lead belongs to the whole study.',
+      })
     if (line.siteId !== null && line.role !== 'coordinator')
       context.addIssue({
         code: 'custom',
@@ -32,6 +38,7 @@ export const memberInput = z
   })
 export type MemberInput = z.infer<typeof memberInput>
 
+/** A line of the team list; one that has ended stays, with when and why. */
 export const member = z.object({
   id,
   personId: id,
@@ -47,6 +54,7 @@ export const member = z.object({
 export type Member = z.infer<typeof member>
 
 export const memberEnd = z.object({ reasonForChange })
+export type MemberEnd = z.infer<typeof memberEnd>
 
 /** Somebody whom the identity provider has vouched for and who may be added to the team. */
 export const person = z.object({ id, name: z.string(), roles: z.array(z.enum(ROLES)) })

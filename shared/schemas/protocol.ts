@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { isCasNumber } from '#shared/terms/casNumber.ts'
 import { REGULATORY_STATUSES } from '#shared/terms/cautions.ts'
 import { UNIT_CODES } from '#shared/terms/gases.ts'
 import { DIRECTIONS, SAMPLINGS } from '#shared/terms/protocol.ts'
@@ -14,7 +15,7 @@ export const analyteInput = z.object({
   formula: words(20).optional(),
   casNumber: z
     .string()
-    .regex(/^\d{2,7}-\d{2}-\d$/, 'A CAS number looks like 7664-41-7.')
+    .refine(isCasNumber, 'This is not a CAS number: its form or its last digit is wrong.')
     .optional(),
   molarMassGPerMol: number
     .positive('Must be more than 0.')
@@ -84,6 +85,20 @@ export const protocolDocument = z
   })
 export type ProtocolDocument = z.infer<typeof protocolDocument>
 
+/** Where a protocol speaks of an analyte that its study does not measure. */
+export function strangeAnalytes(
+  document: ProtocolDocument,
+  analyteKeys: readonly string[],
+): { path: (string | number)[]; message: string }[] {
+  return (['biomarkers', 'acceptanceLimits'] as const).flatMap((part) =>
+    document[part].flatMap(({ analyteKey: key }, index) =>
+      analyteKeys.includes(key)
+        ? []
+        : [{ path: [part, index, 'analyteKey'], message: 'The study does not measure this.' }],
+    ),
+  )
+}
+
 export const protocolVersion = z.object({
   id,
   number: z.number().int(),
@@ -91,12 +106,15 @@ export const protocolVersion = z.object({
   documentHash: z.string(),
   createdAt: instant,
   createdByName: z.string(),
+  /** Why it was amended; null for the first version. */
+  reason: z.string().nullable(),
 })
 export type ProtocolVersion = z.infer<typeof protocolVersion>
 
-/** An amendment: the whole document anew, with the reason. */
+/** An amendment: the whole document anew, the number of the version that the person saw, and why. */
 export const protocolAmendment = z.object({
   document: protocolDocument,
   basedOn: z.number().int(),
   reasonForChange,
 })
+export type ProtocolAmendment = z.infer<typeof protocolAmendment>

@@ -6,6 +6,7 @@ import { id, page, pageOf } from './common.ts'
 export const reference = z.object({
   subjectId: id,
   subjectCode: z.string(),
+  siteName: z.string(),
   outcome: z.enum(OUTCOMES).nullable(),
   measurements: z.array(
     z.object({ sessionNumber: z.number().int(), analyteId: id, value: z.number() }),
@@ -13,8 +14,11 @@ export const reference = z.object({
 })
 export type Reference = z.infer<typeof reference>
 
+/** In the order of subject code; all of them, or those of one subject or site. */
 export const referenceQuery = page.extend({
   code: z.string().trim().max(16).optional(),
+  siteId: id.optional(),
+  subjectId: id.optional(),
   outcome: z.enum(OUTCOMES).optional(),
 })
 export type ReferenceQuery = z.infer<typeof referenceQuery>

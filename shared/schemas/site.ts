@@ -33,3 +33,4 @@ export type Site = z.infer<typeof site>
 export const siteCorrection = siteInput
   .omit({ prefix: true })
   .extend({ version: z.number().int(), reasonForChange })
+export type SiteCorrection = z.infer<typeof siteCorrection>

@@ -1,7 +1,7 @@
 import { z } from 'zod'
 import { DUTIES, ROLES, STUDY_KINDS } from '#shared/policy/people.ts'
 import { caution, id, instant, words } from './common.ts'
-import { analyteInput, protocolDocument } from './protocol.ts'
+import { analyteInput, protocolDocument, strangeAnalytes } from './protocol.ts'
 import { siteInput } from './site.ts'
 
 /** A study of earlier data as its lead sets it up, in one go: the study, its sites, analytes and protocol. */
@@ -22,43 +22,20 @@ export const studyInput = z
     document: protocolDocument,
   })
   .superRefine((study, context) => {
-    const unique = (values: string[], path: string, message: string) => {
-      values.forEach((value, index) => {
-        if (values.indexOf(value) !== index)
-          context.addIssue({
-            code: 'custom',
-            path: [path, index, path === 'sites' ? 'prefix' : 'key'],
-            message,
-          })
-      })
-    }
-    unique(
-      study.sites.map((site) => site.prefix),
-      'sites',
-      'Another site has this prefix.',
-    )
-    unique(
-      study.analytes.map((analyte) => analyte.key),
-      'analytes',
-      'This analyte is there already.',
-    )
+    const issue = (path: (string | number)[], message: string) =>
+      context.addIssue({ code: 'custom', path, message })
+    const repeated = (values: string[]) =>
+      values.flatMap((value, index) => (values.indexOf(value) === index ? [] : [index]))
+
+    for (const index of repeated(study.sites.map((site) => site.prefix)))
+      issue(['sites', index, 'prefix'], 'Another site has this prefix.')
+    for (const index of repeated(study.sites.map((site) => site.name.toLowerCase())))
+      issue(['sites', index, 'name'], 'Another site has this name.')
     const keys = study.analytes.map((analyte) => analyte.key)
-    study.document.biomarkers.forEach((biomarker, index) => {
-      if (!keys.includes(biomarker.analyteKey))
-        context.addIssue({
-          code: 'custom',
-          path: ['document', 'biomarkers', index, 'analyteKey'],
-          message: 'This analyte is not in the list.',
-        })
-    })
-    study.document.acceptanceLimits.forEach((limits, index) => {
-      if (!keys.includes(limits.analyteKey))
-        context.addIssue({
-          code: 'custom',
-          path: ['document', 'acceptanceLimits', index, 'analyteKey'],
-          message: 'This analyte is not in the list.',
-        })
-    })
+    for (const index of repeated(keys))
+      issue(['analytes', index, 'name'], 'This analyte is there already.')
+    for (const { path, message } of strangeAnalytes(study.document, keys))
+      issue(['document', ...path], message)
   })
 export type StudyInput = z.infer<typeof studyInput>
 
@@ -102,6 +79,7 @@ export const study = z.object({
     plannedSubjects: z.number().int().nullable(),
     subjects: z.number().int(),
     sessions: z.number().int(),
+    /** Subjects whose reference standard was done, whatever it said. */
     decidedOutcomes: z.number().int(),
     auditEvents: z.number().int(),
     locks: z.number().int(),

@@ -64,3 +64,15 @@ export const GAS_CATALOGUE: readonly Gas[] = [
   gas('hexanal', 'Hexanal', 'C₆H₁₂O', '66-25-1', 100.161),
   gas('2_methylpentane', '2-Methylpentane', 'C₆H₁₄', '107-83-5', 86.178),
 ]
+
+type Identity = { formula?: string; casNumber?: string; molarMassGPerMol?: number }
+
+/** What an analyte is: a gas of the catalogue keeps the catalogue's word, whatever else was said. */
+export function identityOf(analyte: Identity & { key: string }) {
+  const said: Identity = GAS_CATALOGUE.find((each) => each.key === analyte.key) ?? analyte
+  return {
+    formula: said.formula ?? null,
+    casNumber: said.casNumber ?? null,
+    molarMassGPerMol: said.molarMassGPerMol ?? null,
+  }
+}

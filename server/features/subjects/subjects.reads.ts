@@ -48,7 +48,7 @@ export async function listSubjects(read: Reader, allowed: Allowed, query: Subjec
     ofSites(allowed),
     query.siteId ? eq(subjects.siteId, query.siteId) : undefined,
     query.sex ? eq(subjects.sex, query.sex) : undefined,
-    query.code ? like(subjects.code, `${escaped(query.code.toUpperCase())}%`) : undefined,
+    query.code ? codeBegins(query.code) : undefined,
   )
   const [totals] = await read.select({ total: count() }).from(subjects).where(filter)
   const direction = backwards ? desc : asc
@@ -74,8 +74,9 @@ export function ofSites(allowed: Allowed): SQL | undefined {
   return allowed.sites === 'all' ? undefined : inArray(subjects.siteId, [...allowed.sites])
 }
 
-/** Per cent and underscore stand for themselves. */
-const escaped = (text: string) => text.replace(/[\\%_]/g, '\\$&')
+/** Subjects whose code begins as typed; per cent and underscore stand for themselves. */
+export const codeBegins = (typed: string): SQL =>
+  like(subjects.code, `${typed.toUpperCase().replace(/[\\%_]/g, '\\$&')}%`)
 
 const keyOf = (order: 'code' | 'enrolledAt', row: { code: string; enrolledAt: Date }) =>
   order === 'code' ? row.code : `${row.enrolledAt.toISOString()} ${row.code}`

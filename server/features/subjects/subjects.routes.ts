@@ -24,7 +24,7 @@ export const subjectRoutes = [
     returns: subjectPage,
     handle: async ({ allowed, query }) => {
       const page = await listSubjects(reader(), allowed, query)
-      return { ...page, items: page.items.map(toSubject) }
+      return { ...page, items: page.items.map((row) => toSubject(row, allowed)) }
     },
   }),
   route({
@@ -34,7 +34,8 @@ export const subjectRoutes = [
     params: z.object({ subjectId: id }),
     of: ({ subjectId }) => ({ subjectId }),
     returns: subject,
-    handle: async ({ params }) => toSubject(await getSubject(reader(), params.subjectId)),
+    handle: async ({ params, allowed }) =>
+      toSubject(await getSubject(reader(), params.subjectId), allowed),
   }),
   route({
     method: 'post',
@@ -45,8 +46,8 @@ export const subjectRoutes = [
     body: subjectInput,
     of: ({ siteId }) => ({ siteId }),
     returns: subject,
-    handle: async ({ actor, params, body }) =>
-      toSubject(await enrolSubject(actor, params.siteId, body)),
+    handle: async ({ actor, params, body, allowed }) =>
+      toSubject(await enrolSubject(actor, params.siteId, body), allowed),
   }),
   route({
     method: 'patch',
@@ -56,7 +57,7 @@ export const subjectRoutes = [
     body: subjectCorrection,
     of: ({ subjectId }) => ({ subjectId }),
     returns: subject,
-    handle: async ({ actor, params, body }) =>
-      toSubject(await correctSubject(actor, params.subjectId, body)),
+    handle: async ({ actor, params, body, allowed }) =>
+      toSubject(await correctSubject(actor, params.subjectId, body), allowed),
   }),
 ]
