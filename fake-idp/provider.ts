@@ -1,4 +1,4 @@
-import { generateKeyPairSync, randomBytes } from 'node:crypto'
+import { createPrivateKey, generateKeyPairSync, randomBytes } from 'node:crypto'
 import Provider, { type KoaContextWithOIDC } from 'oidc-provider'
 import { type Fault, type SigningKeys, spoilIdToken, spoilResponseIssuer } from './faults.ts'
 import { faultPage, signedOutPage, signOutPage } from './pages.ts'
@@ -12,6 +12,8 @@ export type ProviderOptions = {
   clientSecret: string
   redirectUris: string[]
   postLogoutRedirectUris: string[]
+  /** RSA private key, PEM (PKCS #8); a new one where left out. Kept, tokens stay valid over a restart. */
+  signingKey?: string
 }
 
 /**
@@ -22,8 +24,9 @@ export function createProvider(
   options: ProviderOptions,
   currentFault: () => Fault | null,
 ): Provider {
-  const { privateKey } = generateKeyPairSync('rsa', { modulusLength: 2048 })
-  const foreign = generateKeyPairSync('rsa', { modulusLength: 2048 }).privateKey
+  const newKey = () => generateKeyPairSync('rsa', { modulusLength: 2048 }).privateKey
+  const own = options.signingKey ? createPrivateKey(options.signingKey) : newKey()
+  const foreign = newKey()
   const provider = new Provider(options.issuer, {
     clients: [
       {
@@ -34,7 +37,7 @@ export function createProvider(
         require_auth_time: true,
       },
     ],
-    jwks: { keys: [{ ...privateKey.export({ format: 'jwk' }), use: 'sig', alg: 'RS256' }] },
+    jwks: { keys: [{ ...own.export({ format: 'jwk' }), use: 'sig', alg: 'RS256' }] },
     claims: {
       openid: ['sub', 'acr', 'amr'],
       profile: ['name', 'roles', 'zoneinfo'],
@@ -107,7 +110,7 @@ export function createProvider(
   provider.use(async (context, next) => {
     await next()
     const fault = currentFault()
-    if (fault) spoil(context as KoaContextWithOIDC, fault, { own: privateKey, foreign })
+    if (fault) spoil(context as KoaContextWithOIDC, fault, { own, foreign })
   })
   return provider
 }

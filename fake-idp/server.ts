@@ -53,11 +53,14 @@ export async function startFakeIdp(options: FakeIdpOptions): Promise<FakeIdp> {
   }
 }
 
-/** No script runs here; a form may lead on to the application, so form-action stays open. */
+/**
+ * No script of ours; the provider adds the digest of the one line with which it sends a form on. A
+ * form may lead back to the application, so form-action stays open.
+ */
 const plainPages: RequestHandler = (_request, response, next) => {
   response.set({
     'Content-Security-Policy':
-      "default-src 'none'; style-src 'unsafe-inline'; base-uri 'none'; frame-ancestors 'none'",
+      "default-src 'none'; script-src 'self'; style-src 'unsafe-inline'; base-uri 'none'; frame-ancestors 'none'",
     'Cache-Control': 'no-store',
     'X-Content-Type-Options': 'nosniff',
     'Referrer-Policy': 'no-referrer',
@@ -144,6 +147,7 @@ async function run(env: NodeJS.ProcessEnv): Promise<void> {
     clientSecret: need('STAND_IN_CLIENT_SECRET'),
     redirectUris: need('STAND_IN_REDIRECT_URIS').split(' '),
     postLogoutRedirectUris: need('STAND_IN_SIGN_OUT_URIS').split(' '),
+    signingKey: env.STAND_IN_SIGNING_KEY,
     controls: env.STAND_IN_CONTROLS === 'true',
   })
   for (const signal of ['SIGINT', 'SIGTERM'] as const)
