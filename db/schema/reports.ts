@@ -1,4 +1,4 @@
-import { index, int, json, mysqlEnum, mysqlTable, varchar } from 'drizzle-orm/mysql-core'
+import { int, json, mysqlEnum, mysqlTable, uniqueIndex, varchar } from 'drizzle-orm/mysql-core'
 import { REPORT_STATES } from '#shared/terms/reportState.ts'
 import { instant, recordColumns, uuid } from './columns.ts'
 
@@ -16,5 +16,5 @@ export const reports = mysqlTable(
     issuedAt: instant('issued_at').notNull(),
     jobId: uuid('job_id'),
   },
-  (t) => [index('reports_study').on(t.studyId, t.number)],
+  (t) => [uniqueIndex('reports_number').on(t.studyId, t.number)],
 )
