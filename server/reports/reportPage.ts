@@ -5,33 +5,42 @@ import { BODY, BODY_WIDTH, COLOUR, FRAME_LAYOUT, MARGIN, PAGE, SIZE } from './re
 import { styledText } from './reportText.ts'
 import { textHeight } from './textHeight.ts'
 
-/** What lies under every page: the margin with the caution behind its copper rule. */
+/**
+ * The margin of a page behind its copper rule: the caution, and on the first page provenance. It is
+ * pdfmake's background because a header may not be higher than the space over the text.
+ */
 export function pageBackground(document: ReportDocument, page: number): Content {
-  const beside: Content[] = [
-    cautionBox(document.caution, SIZE.small),
-    ...(page === 1 ? provenancePlaces(document).margin : []).map(marginPair),
-  ]
+  const provenance = page === 1 ? provenancePlaces(document).margin : []
+  const beside = [cautionBox(document.caution, SIZE.small), ...provenance.map(marginPair)]
   return [
-    {
-      canvas: [
-        { type: 'rect', x: 0, y: 0, w: MARGIN.rule, h: PAGE.height, color: COLOUR.margin },
-        {
-          type: 'line',
-          x1: MARGIN.rule,
-          y1: 0,
-          x2: MARGIN.rule,
-          y2: PAGE.height,
-          lineWidth: 0.9,
-          lineColor: COLOUR.copper,
-        },
-      ],
-      absolutePosition: { x: 0, y: 0 },
-    },
+    marginStrip(),
     {
       columns: [{ width: MARGIN.width, stack: beside }],
       absolutePosition: { x: MARGIN.left, y: MARGIN.top },
     },
   ]
+}
+
+/** A filled cell, since pdfmake lays a cell's fill, such as the caution's, under any drawing. */
+function marginStrip(): Content {
+  const none = () => 0
+  return {
+    table: {
+      widths: [MARGIN.rule],
+      heights: [PAGE.height - 1],
+      body: [[{ text: '', fillColor: COLOUR.margin }]],
+    },
+    layout: {
+      hLineWidth: none,
+      vLineWidth: (line) => (line === 1 ? 0.9 : 0),
+      vLineColor: COLOUR.copper,
+      paddingLeft: none,
+      paddingRight: none,
+      paddingTop: none,
+      paddingBottom: none,
+    },
+    absolutePosition: { x: 0, y: 0 },
+  }
 }
 
 /**
@@ -150,7 +159,7 @@ function stampBox(stamp: string): Column {
   return {
     width: 'auto',
     table: { body: [[cell]] },
-    layout: { ...FRAME_LAYOUT, paddingTop: () => 1, paddingBottom: () => 1.5 },
+    layout: { ...FRAME_LAYOUT, paddingTop: () => 2, paddingBottom: () => 0.5 },
   }
 }
 

@@ -1,14 +1,13 @@
-import { execFileSync } from 'node:child_process'
-import { mkdtempSync, rmSync, writeFileSync } from 'node:fs'
-import { tmpdir } from 'node:os'
-import { join } from 'node:path'
 import { Worker } from 'node:worker_threads'
-import { afterAll, beforeAll, describe, expect, test } from 'vitest'
+import { beforeAll, describe, expect, test } from 'vitest'
 import { drawFigures, figureSvg } from '#server/reports/figureSvg.ts'
+import { figureTableBlock } from '#server/reports/figureTableBlock.ts'
 import { renderPdf } from '#server/reports/renderPdf.ts'
-import type { ReportBlock, ReportDocument } from '#server/reports/reportDocument.ts'
+import type { ReportBlock } from '#server/reports/reportDocument.ts'
 import { textRuns } from '#server/reports/textRuns.ts'
 import { RocCurve } from '#shared/figures/RocCurve.tsx'
+import { rocCurveTable } from '#shared/figures/rocCurveTable.ts'
+import { aReport, bookmarksOf, fileInfoOf, HASH, pagesOf } from '../support/reports.ts'
 
 /** Made-up numbers: only the look of the page is under test. */
 const curve = {
@@ -29,30 +28,6 @@ const figure = (
   />
 )
 
-const HASH = '9f3c71a0b2d84e55c6f7091a3b4c5d6e7f8091a2b3c4d5e6f70819a2b3c4d5e6'
-
-function aReport(blocks: readonly ReportBlock[]): ReportDocument {
-  return {
-    title: 'Interim report 2',
-    subtitle: 'Invented data',
-    header: { study: 'LARK-2', part: 'Closed part', stamp: 'Unblinded: earlier data' },
-    caution: {
-      heading: 'For research use only',
-      text: 'Not for diagnosis or treatment decisions.',
-    },
-    datasetHash: HASH,
-    provenance: [
-      { label: 'Counted', value: '201 of 214 subjects' },
-      { label: 'Manifest', value: HASH },
-    ],
-    createdAt: '2026-10-14T11:52:00.000Z',
-    sections: [
-      { heading: 'Primary analysis', blocks },
-      { heading: 'Signatures', blocks: [{ kind: 'paragraph', text: 'None yet.', quiet: true }] },
-    ],
-  }
-}
-
 const SIGNS = '≥ ≤ ≠ ≈ ∞ √ → ✓ − µ ₂'
 const rows = Array.from({ length: 90 }, (_, at) => [`N04-${1000 + at}-W`, `${300 + at}`, '≥ 0.90'])
 const sample = aReport([
@@ -72,24 +47,6 @@ const sample = aReport([
     rows,
   },
 ])
-
-let folder: string
-beforeAll(() => {
-  folder = mkdtempSync(join(tmpdir(), 'report-'))
-})
-afterAll(() => rmSync(folder, { recursive: true, force: true }))
-
-/** Each page's text as poppler's pdftotext reads it back, in the order in which it is laid out. */
-async function pagesOf(document: ReportDocument): Promise<string[]> {
-  return readPages(await renderPdf(document))
-}
-
-function readPages(pdf: Uint8Array): string[] {
-  const path = join(folder, 'report.pdf')
-  writeFileSync(path, pdf)
-  const text = execFileSync('pdftotext', ['-layout', path, '-'], { encoding: 'utf8' })
-  return text.split('\f').slice(0, -1)
-}
 
 describe('every page', () => {
   let pages: string[]
@@ -146,100 +103,18 @@ test('the same report gives the same bytes', async () => {
 })
 
 test('the file carries its title, its date and a bookmark for each section', async () => {
-  const path = join(folder, 'metadata.pdf')
-  writeFileSync(path, await renderPdf(sample))
-  const info = execFileSync('pdfinfo', ['-isodates', path], { encoding: 'utf8' })
+  const info = await fileInfoOf(sample)
   expect(info).toMatch(/Title:\s+Interim report 2/)
   expect(info).toMatch(/CreationDate:\s+2026-10-14T11:52:00Z/)
   expect(info).toMatch(/Page size:.*A4/)
-  const outline = execFileSync('pdftohtml', ['-xml', '-stdout', '-i', path], { encoding: 'utf8' })
-  expect([...outline.matchAll(/<item page="\d+">([^<]*)</g)].map(([, name]) => name)).toEqual([
-    'Primary analysis',
-    'Signatures',
-  ])
-})
-
-test('a headline never stands alone at the foot of a page', async () => {
-  for (let lines = 22; lines <= 30; lines += 1) {
-    const filler = Array.from({ length: lines }, (_, at) => ({
-      kind: 'paragraph' as const,
-      text: `Line ${at}`,
-    }))
-    const pages = await pagesOf(aReport(filler))
-    const page = pages.find((text) => text.includes('Signatures'))
-    expect(page).toContain('None yet.')
-  }
-})
-
-test('a headline goes with the figure or table under it', async () => {
-  const table: ReportBlock = { kind: 'table', columns: [{ label: 'Subject' }], rows: [['N04-1']] }
-  const drawing: ReportBlock = { kind: 'figure', figure, caption: 'N04-1' }
-  for (const next of [table, drawing]) {
-    for (let lines = 18; lines <= 28; lines += 1) {
-      const filler = Array.from({ length: lines }, (_, at) => ({
-        kind: 'paragraph' as const,
-        text: `Line ${at}`,
-      }))
-      const headline: ReportBlock = { kind: 'subheading', text: 'All subjects' }
-      const pages = await pagesOf(aReport([...filler, headline, next]))
-      expect(pages.find((text) => text.includes('All subjects'))).toContain('N04-1')
-    }
-  }
-})
-
-test('a word too long for its column is broken and nothing of it is lost', async () => {
-  const long = 'abcdefghij'.repeat(30)
-  const columns = [{ label: 'Subject' }, { label: 'Reason' }]
-  const pages = await pagesOf(aReport([{ kind: 'table', columns, rows: [['N04-1', long]] }]))
-  const letters = pages.join('').match(/\b[a-j]{20,}\b/g)
-  expect(letters?.join('')).toContain(long.slice(0, 20))
-  expect(letters?.join('').length).toBe(long.length)
-})
-
-/** Numbered words, so that every lost one is noticed. */
-function numbered(count: number): string[] {
-  return Array.from({ length: count }, (_, at) => `word${at}`)
-}
-
-const blank = '<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 300 300"></svg>'
-const longBlocks: Record<string, (text: string) => ReportBlock> = {
-  paragraph: (text) => ({ kind: 'paragraph', text }),
-  caution: (text) => ({ kind: 'caution', heading: 'Exploratory', text }),
-  value: (text) => ({ kind: 'keyValues', pairs: [{ label: 'Reason', value: text }] }),
-  cell: (text) => ({
-    kind: 'table',
-    columns: [{ label: 'Subject' }, { label: 'Reason' }],
-    rows: [['N04-1', text]],
-  }),
-  caption: (text) => ({ kind: 'figure', figure: blank, caption: text }),
-}
-
-test.each(Object.entries(longBlocks))(
-  'a %s of any length is printed to its last word',
-  async (_, block) => {
-    for (const count of [60, 400, 700, 1000, 2500]) {
-      const text = (await pagesOf(aReport([block(numbered(count).join(' '))]))).join('\n')
-      expect(new Set(text.match(/\bword\d+\b/g))).toEqual(new Set(numbered(count)))
-      expect(text).toContain('None yet.')
-    }
-  },
-)
-
-test('provenance that the margin has no room for goes into the text', async () => {
-  const provenance = numbered(80).map((value) => ({ label: `About ${value}`, value }))
-  const text = (await pagesOf({ ...aReport([]), provenance })).join('\n')
-  expect(new Set(text.match(/\bword\d+\b/g))).toEqual(new Set(numbered(80)))
-})
-
-test('a caution that would not fit on every page is refused', async () => {
-  const caution = { heading: 'Caution', text: numbered(900).join(' ') }
-  await expect(renderPdf({ ...aReport([]), caution })).rejects.toThrow(RangeError)
+  expect(await bookmarksOf(sample)).toEqual(['Primary analysis', 'Signatures'])
 })
 
 test('a long title keeps to one line of the header', async () => {
-  const title = numbered(40).join(' ')
+  const numbered = Array.from({ length: 40 }, (_, at) => `word${at}`)
+  const title = numbered.join(' ')
   const [first, second] = await pagesOf({ ...sample, title })
-  expect(new Set(first!.match(/\bword\d+\b/g))).toEqual(new Set(numbered(40)))
+  expect(new Set(first!.match(/\bword\d+\b/g))).toEqual(new Set(numbered))
   expect(second).toMatch(/LARK-2\s+word0 .*…\s+Closed part/)
 })
 
@@ -262,6 +137,14 @@ test('a figure is drawn for the page as for the screen, with its missing signs s
   const svg = figureSvg(figure)
   expect(svg).toMatch(/Ammonia <tspan font-family="DejaVu Sans">→ <\/tspan>end-tidal/)
   expect(figureSvg(svg)).toBe(svg)
+})
+
+test('the numbers behind a figure are printed in the words of the screen', async () => {
+  const block = figureTableBlock(rocCurveTable({ curves: [{ ...curve, label: 'Ammonia' }] }))
+  const text = (await pagesOf(aReport([block]))).join('\n')
+  expect(text).toContain('Sensitivity and specificity at every threshold')
+  expect(text).toMatch(/Threshold \(ppb\)\s+Sensitivity\s+Specificity\s+1 − specificity/)
+  expect(text).toMatch(/1,180\s+0\.800\s+0\.800\s+0\.200/)
 })
 
 test('a report whose figures are drawn renders the same in a worker thread', async () => {
