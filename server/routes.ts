@@ -1,5 +1,7 @@
 import { analyteRoutes } from './features/analytes/analytes.routes.ts'
 import { auditEventRoutes } from './features/auditEvents/auditEvents.routes.ts'
+import { datasetRoutes } from './features/datasets/datasets.routes.ts'
+import { lockRoutes } from './features/locks/locks.routes.ts'
 import { meRoutes } from './features/me/me.routes.ts'
 import { memberRoutes } from './features/members/members.routes.ts'
 import { protocolRoutes } from './features/protocol/protocol.routes.ts'
@@ -15,6 +17,8 @@ export const ROUTES: readonly Route[] = [
   ...auditEventRoutes,
   ...meRoutes,
   ...analyteRoutes,
+  ...datasetRoutes,
+  ...lockRoutes,
   ...memberRoutes,
   ...protocolRoutes,
   ...referenceRoutes,
