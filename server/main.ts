@@ -47,7 +47,13 @@ function startThread(): Worker {
   const bundled = import.meta.url.endsWith('.js')
   const worker = bundled
     ? new Worker(new URL('./thread.js', import.meta.url))
-    : new Worker(new URL('./jobs/thread.ts', import.meta.url), { execArgv: ['--import', 'tsx'] })
+    : new Worker(
+        // On Node 20 a thread does not take tsx over from the process, nor by its arguments.
+        `import { register } from 'tsx/esm/api'
+         register()
+         await import(${JSON.stringify(new URL('./jobs/thread.ts', import.meta.url).href)})`,
+        { eval: true },
+      )
   worker.on('error', (error) => {
     console.error(
       JSON.stringify({ level: 'error', event: 'thread.failed', fault: String(error.stack) }),
