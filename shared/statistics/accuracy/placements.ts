@@ -1,6 +1,6 @@
+import { sortedOrder } from '../description/sortedOrder.ts'
 import { StatisticsError } from '../StatisticsError.ts'
 import type { Classes } from './Classes.ts'
-import { sortedOrder } from './sortedOrder.ts'
 
 /** Each value's placement: the share of the other class that it beats, ties one half. */
 export type Placements = {

@@ -1,6 +1,6 @@
+import { sortedValues } from '../description/sortedValues.ts'
 import { StatisticsError } from '../StatisticsError.ts'
 import type { Classes, Direction } from './Classes.ts'
-import { sortedValues } from './sortedValues.ts'
 
 /**
  * All points of an empirical ROC curve, from the strictest cut-off (nobody positive) to the laxest

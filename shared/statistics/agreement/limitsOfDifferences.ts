@@ -1,3 +1,4 @@
+import { moments } from '../description/moments.ts'
 import { noncentralTQuantile } from '../distributions/noncentralTQuantile.ts'
 import { studentTQuantile } from '../distributions/studentTQuantile.ts'
 import { studentTTwoSided } from '../distributions/studentTTwoSided.ts'
@@ -5,7 +6,6 @@ import { zFor } from '../distributions/zFor.ts'
 import type { Interval, LevelOption } from '../Interval.ts'
 import { requireFinite } from '../requireFinite.ts'
 import { StatisticsError } from '../StatisticsError.ts'
-import { moments } from './moments.ts'
 
 /** Intervals of the two limits by one method. */
 export type LimitIntervals = { lower: Interval; upper: Interval }

@@ -1,7 +1,7 @@
+import { midranks } from '../description/midranks.ts'
 import { studentTTwoSided } from '../distributions/studentTTwoSided.ts'
 import { zFor } from '../distributions/zFor.ts'
 import type { Interval, LevelOption } from '../Interval.ts'
-import { midranks } from './midranks.ts'
 import type { Pairs } from './Pairs.ts'
 import { pearson } from './pearson.ts'
 

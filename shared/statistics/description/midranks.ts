@@ -1,4 +1,4 @@
-import { sortedOrder } from '../accuracy/sortedOrder.ts'
+import { sortedOrder } from './sortedOrder.ts'
 
 /**
  * Ranks 1…n in the order of the input, ties given their mean rank.

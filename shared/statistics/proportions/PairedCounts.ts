@@ -1,0 +1,7 @@
+/** Results of two tests on the same subjects. */
+export type PairedCounts = {
+  bothPositive: number
+  firstOnly: number
+  secondOnly: number
+  bothNegative: number
+}
