@@ -26,16 +26,22 @@ export const subject = z.object({
   enrolledAt: instant,
   covariates: z.record(z.string(), z.union([z.string(), z.number()])),
   sessionCount: z.number().int(),
+  /** Whether the reference standard was done, not what it said: a state, of no class. */
+  outcomeDecided: z.boolean(),
   importNumber: z.number().int().nullable(),
   version: z.number().int(),
 })
 export type Subject = z.infer<typeof subject>
+
+/** What a subject may still lack. */
+export const SUBJECT_NEEDS = ['session', 'outcome'] as const
 
 export const SUBJECT_ORDERS = ['code', 'enrolledAt'] as const
 export const subjectQuery = page.extend({
   code: z.string().trim().max(16).optional(),
   siteId: id.optional(),
   sex: sex.optional(),
+  needs: z.enum(SUBJECT_NEEDS).optional(),
   order: z.enum(SUBJECT_ORDERS).optional(),
   descending: z.enum(['true', 'false']).optional(),
 })

@@ -10,10 +10,15 @@ import { StudyFrame } from './StudyFrame.tsx'
 import { SIGNED_IN_PATH } from './signIn.ts'
 
 /** Pages outside of any study. */
-const PLAIN_PAGES: RouteObject[] = []
+const PLAIN_PAGES: RouteObject[] = [
+  { index: true, lazy: page(() => import('../pages/StudiesPage.tsx')) },
+  { path: 'studies/new', lazy: page(() => import('../pages/NewStudyPage.tsx')) },
+]
 
 /** Pages of a study; the first part of the path names its station. */
-const STUDY_PAGES: RouteObject[] = []
+const STUDY_PAGES: RouteObject[] = [
+  { path: 'review', lazy: page(() => import('../pages/ReviewPage.tsx')) },
+]
 
 const builtStations = new Set(STUDY_PAGES.map((route) => route.path?.split('/')[0] ?? ''))
 const firstPage = STUDY_PAGES.find((route) => route.path && !route.path.includes(':'))?.path

@@ -1,4 +1,9 @@
+import { eq } from 'drizzle-orm'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
+import { referenceOutcomes } from '#db/schema/referenceOutcomes.ts'
+import { sessions } from '#db/schema/sessions.ts'
+import { studies } from '#db/schema/studies.ts'
+import { subjects } from '#db/schema/subjects.ts'
 import { isSubjectCode } from '#shared/terms/subjectCode.ts'
 import { type Api, aKey, startApi } from '../support/api.ts'
 
@@ -166,5 +171,89 @@ describe('listing subjects', () => {
     await api.given.subject(study, study.north)
     const { body } = await client.get(`/api/studies/${study.id}/subjects`).query({ code: 'N%' })
     expect(body.total).toBe(0)
+  })
+})
+
+describe('what a subject still lacks', () => {
+  test('narrows the list to subjects without a session, or without a decided outcome', async () => {
+    const study = await api.given.study()
+    const lead = api.as(await api.given.member(study, { role: 'coordinator' }))
+    const [whole, bare, notDone] = [
+      await api.given.subject(study, study.north),
+      await api.given.subject(study, study.north),
+      await api.given.subject(study, study.north),
+    ]
+    const of = (subject: { id: string }) => ({
+      id: aKey(),
+      studyId: study.id,
+      siteId: study.north.id,
+      subjectId: subject.id,
+      createdAt: new Date(),
+    })
+    await api.fixtures.insert(sessions).values([
+      { ...of(whole), number: 1 },
+      { ...of(whole), number: 2 },
+      { ...of(notDone), number: 1 },
+    ])
+    await api.fixtures.insert(referenceOutcomes).values([
+      { ...of(whole), outcome: 'absent' },
+      { ...of(notDone), outcome: 'notDone' },
+    ])
+    const codes = async (query: Record<string, string>) => {
+      const { body } = await lead.get(`/api/studies/${study.id}/subjects`).query(query)
+      expect(body.total).toBe(body.items.length)
+      return body.items.map((each: { code: string }) => each.code).sort()
+    }
+    expect(await codes({ needs: 'session' })).toEqual([bare.code])
+    expect(await codes({ needs: 'outcome' })).toEqual([bare.code, notDone.code].sort())
+    const { body } = await lead.get(`/api/studies/${study.id}/subjects`).query({ code: whole.code })
+    expect(body.items).toMatchObject([{ sessionCount: 2, outcomeDecided: true }])
+  })
+
+  test('says that an outcome is there and never which', async () => {
+    const study = await api.given.study({ kind: 'prospective' })
+    const nurse = await api.given.member(study, {
+      role: 'coordinator',
+      duty: 'bedside',
+      site: study.north,
+    })
+    const subject = await api.given.subject(study, study.north)
+    const read = async (outcome: 'present' | 'absent') => {
+      await api.fixtures
+        .insert(referenceOutcomes)
+        .values({
+          id: aKey(),
+          studyId: study.id,
+          siteId: study.north.id,
+          subjectId: subject.id,
+          createdAt: new Date(),
+          outcome,
+        })
+        .onDuplicateKeyUpdate({ set: { outcome } })
+      return (await api.as(nurse).get(`/api/subjects/${subject.id}`)).text
+    }
+    expect(await read('present')).toBe(await read('absent'))
+  })
+
+  test('hides covariates, which may hold either class, from a blinded reader', async () => {
+    const study = await api.given.study({ kind: 'prospective' })
+    const nurse = await api.given.member(study, {
+      role: 'coordinator',
+      duty: 'bedside',
+      site: study.north,
+    })
+    const subject = await api.given.subject(study, study.north)
+    await api.fixtures
+      .update(subjects)
+      .set({ covariates: { severity: 3 } })
+      .where(eq(subjects.id, subject.id))
+    const { body } = await api.as(nurse).get(`/api/subjects/${subject.id}`)
+    expect(body.covariates).toEqual({})
+    await api.fixtures
+      .update(studies)
+      .set({ releasedAt: new Date() })
+      .where(eq(studies.id, study.id))
+    const after = await api.as(nurse).get(`/api/subjects/${subject.id}`)
+    expect(after.body.covariates).toEqual({ severity: 3 })
   })
 })

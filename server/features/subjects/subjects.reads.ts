@@ -1,6 +1,22 @@
-import { and, asc, count, desc, eq, gt, inArray, like, lt, or, type SQL, sql } from 'drizzle-orm'
+import {
+  and,
+  asc,
+  count,
+  desc,
+  eq,
+  gt,
+  inArray,
+  isNull,
+  like,
+  lt,
+  notExists,
+  or,
+  type SQL,
+  sql,
+} from 'drizzle-orm'
 import type { Reader } from '#db/client.ts'
 import { imports } from '#db/schema/imports.ts'
+import { referenceOutcomes } from '#db/schema/referenceOutcomes.ts'
 import { sessions } from '#db/schema/sessions.ts'
 import { sites } from '#db/schema/sites.ts'
 import { subjects } from '#db/schema/subjects.ts'
@@ -23,6 +39,10 @@ const columns = {
     sql<number>`(select count(*) from ${sessions} where ${sessions.subjectId} = ${subjects.id})`.mapWith(
       Number,
     ),
+  outcomeDecided:
+    sql<boolean>`(${referenceOutcomes.outcome} is not null and ${referenceOutcomes.outcome} <> 'notDone')`.mapWith(
+      Boolean,
+    ),
 }
 export type SubjectRow = Awaited<ReturnType<typeof getSubject>>
 
@@ -33,6 +53,7 @@ export async function getSubject(read: Reader, subjectId: string) {
     .from(subjects)
     .innerJoin(sites, eq(sites.id, subjects.siteId))
     .leftJoin(imports, eq(imports.id, subjects.importId))
+    .leftJoin(referenceOutcomes, eq(referenceOutcomes.subjectId, subjects.id))
     .where(eq(subjects.id, subjectId))
   if (!row) throw new AppError('not-found')
   return row
@@ -49,14 +70,20 @@ export async function listSubjects(read: Reader, allowed: Allowed, query: Subjec
     query.siteId ? eq(subjects.siteId, query.siteId) : undefined,
     query.sex ? eq(subjects.sex, query.sex) : undefined,
     query.code ? codeBegins(query.code) : undefined,
+    query.needs ? lacking(read, query.needs) : undefined,
   )
-  const [totals] = await read.select({ total: count() }).from(subjects).where(filter)
+  const [totals] = await read
+    .select({ total: count() })
+    .from(subjects)
+    .leftJoin(referenceOutcomes, eq(referenceOutcomes.subjectId, subjects.id))
+    .where(filter)
   const direction = backwards ? desc : asc
   const rows = await read
     .select(columns)
     .from(subjects)
     .innerJoin(sites, eq(sites.id, subjects.siteId))
     .leftJoin(imports, eq(imports.id, subjects.importId))
+    .leftJoin(referenceOutcomes, eq(referenceOutcomes.subjectId, subjects.id))
     .where(and(filter, query.after ? beyond(order, query.after, backwards) : undefined))
     .orderBy(direction(subjects[order]), direction(subjects.code))
     .limit(limit + 1)
@@ -77,6 +104,15 @@ export function ofSites(allowed: Allowed): SQL | undefined {
 /** Subjects whose code begins as typed; per cent and underscore stand for themselves. */
 export const codeBegins = (typed: string): SQL =>
   like(subjects.code, `${typed.toUpperCase().replace(/[\\%_]/g, '\\$&')}%`)
+
+/** Subjects without a session, or without a decided outcome. */
+function lacking(read: Reader, need: NonNullable<SubjectQuery['needs']>): SQL | undefined {
+  if (need === 'outcome')
+    return or(isNull(referenceOutcomes.id), eq(referenceOutcomes.outcome, 'notDone'))
+  return notExists(
+    read.select({ id: sessions.id }).from(sessions).where(eq(sessions.subjectId, subjects.id)),
+  )
+}
 
 const keyOf = (order: 'code' | 'enrolledAt', row: { code: string; enrolledAt: Date }) =>
   order === 'code' ? row.code : `${row.enrolledAt.toISOString()} ${row.code}`
