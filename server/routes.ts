@@ -2,6 +2,7 @@ import { analyteRoutes } from './features/analytes/analytes.routes.ts'
 import { auditEventRoutes } from './features/auditEvents/auditEvents.routes.ts'
 import { datasetRoutes } from './features/datasets/datasets.routes.ts'
 import { lockRoutes } from './features/locks/locks.routes.ts'
+import { importRoutes } from './features/imports/imports.routes.ts'
 import { meRoutes } from './features/me/me.routes.ts'
 import { memberRoutes } from './features/members/members.routes.ts'
 import { protocolRoutes } from './features/protocol/protocol.routes.ts'
@@ -21,6 +22,7 @@ export const ROUTES: readonly Route[] = [
   ...lockRoutes,
   ...memberRoutes,
   ...protocolRoutes,
+  ...importRoutes,
   ...referenceRoutes,
   ...sessionRoutes,
   ...siteRoutes,

@@ -21,7 +21,8 @@ export type CompoundRecord = {
   recordId: string
   recordLabel: string
   recordSiteId: string | null
-  rows: (readonly [RecordTable, Row])[]
+  /** Each row, and what the trail calls it where the table's own name would not tell rows apart. */
+  rows: (readonly [table: RecordTable, row: Row, name?: string])[]
 }
 
 const ROWS_AT_A_TIME = 500
@@ -69,10 +70,10 @@ export class ChangeTx {
         this.happenings.push({
           ...record,
           event: this.#event,
-          fields: record.rows.flatMap(([table, row], index) =>
+          fields: record.rows.flatMap(([table, row, name = auditedAs(table).record]) =>
             newValues(table, row).map((change) => ({
               ...change,
-              field: `${auditedAs(table).record}${index > 0 ? ` ${index}` : ''}.${change.field}`,
+              field: `${name}.${change.field}`,
             })),
           ),
         })

@@ -182,6 +182,15 @@ export const POLICY = {
     grants: [released(studyLead('study'))],
     reveals: 'linked',
     whenLocked: 'refuse',
+    records: 'import.columnsNamed',
+    onlyKind: 'earlierData',
+  },
+  // What the job does on behalf of the person who asked.
+  'import.judge': {
+    effect: 'write',
+    grants: [released(studyLead('study'))],
+    reveals: 'linked',
+    whenLocked: 'refuse',
     records: 'import.previewed',
     onlyKind: 'earlierData',
   },
@@ -190,7 +199,25 @@ export const POLICY = {
     grants: [released(studyLead('study'))],
     reveals: 'linked',
     whenLocked: 'refuse',
+    records: 'import.entryRequested',
+    onlyKind: 'earlierData',
+  },
+  // What the job does on behalf of the person who asked.
+  'import.store': {
+    effect: 'write',
+    grants: [released(studyLead('study'))],
+    reveals: 'linked',
+    whenLocked: 'refuse',
     records: 'import.entered',
+    onlyKind: 'earlierData',
+  },
+  // Which line of the file became which subject: for the site's own key file.
+  'import.readCodes': {
+    effect: 'read',
+    grants: [released(studyLead('study'))],
+    reveals: 'none',
+    whenLocked: 'allow',
+    records: 'import.codesDownloaded',
     onlyKind: 'earlierData',
   },
   'import.discard': {

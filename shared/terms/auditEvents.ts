@@ -18,8 +18,11 @@ export const AUDIT_EVENT_LABELS: Readonly<Record<string, string>> = {
   'subject.corrected': 'Subject corrected',
 
   'import.uploaded': 'File uploaded',
+  'import.columnsNamed': 'Columns of a file named',
   'import.previewed': 'File checked',
+  'import.entryRequested': 'Entering of a file asked for',
   'import.entered': 'Row of a file entered',
+  'import.codesDownloaded': 'Codes of an import downloaded',
   'import.discarded': 'File discarded',
 
   'lock.requested': 'Lock asked for',

@@ -1,3 +1,7 @@
+/**
+ * `previewing`, `entering` and `failed` are not stored: they follow from the job under way or last
+ * ended, so that a job that dies leaves nothing to put right.
+ */
 export const IMPORT_STATES = [
   'uploaded',
   'previewing',

@@ -1,0 +1,62 @@
+import type { ColumnMeaning, MeaningOf } from '#shared/schemas/import.ts'
+import { plainWord } from './cells.ts'
+
+type Coding = Record<string, readonly string[]>
+
+/** Words in common use for each side. Codes such as 1 and 2 say nothing by themselves: they stay open. */
+const OUTCOME_WORDS = {
+  present: ['1', 'yes', 'y', 'true', 'present', 'positive', 'pos', 'case', 'diseased', '+'],
+  absent: ['0', 'no', 'n', 'false', 'absent', 'negative', 'neg', 'control', 'healthy', '-'],
+  indeterminate: ['indeterminate', 'unclear', 'equivocal', 'borderline', 'not classified'],
+} as const satisfies Coding
+
+const SEX_WORDS = {
+  F: ['f', 'female', 'woman', 'girl', 'w'],
+  M: ['m', 'male', 'man', 'boy'],
+  other: ['other', 'x', 'd', 'diverse', 'intersex', 'non-binary'],
+  unknown: ['u', 'unknown', 'not recorded', 'na', 'n/a', '-'],
+} as const satisfies Coding
+
+/** The words of a column, each on the side where it belongs by common use. */
+export const outcomeCoding = (words: readonly string[]): MeaningOf<'outcome'> => ({
+  as: 'outcome',
+  ...sorted(words, OUTCOME_WORDS),
+})
+
+export const sexCoding = (words: readonly string[]): MeaningOf<'sex'> => ({
+  as: 'sex',
+  ...sorted(words, SEX_WORDS),
+})
+
+/** Whether every word of a column is known on one of the sides. */
+export const isCodedOutcome = (words: readonly string[]): boolean =>
+  words.length > 0 && words.length <= 5 && codingProblem(outcomeCoding(words), words) === null
+
+function sorted<C extends Coding>(words: readonly string[], coding: C) {
+  const sides = Object.keys(coding) as (keyof C & string)[]
+  return Object.fromEntries(
+    sides.map((side) => [
+      side,
+      words.filter((word) => coding[side]!.includes(plainWord(word))).slice(0, 20),
+    ]),
+  ) as { [Side in keyof C]: string[] }
+}
+
+/** The sides of a coded column with their words. */
+export function sidesOf(meaning: ColumnMeaning): [side: string, words: readonly string[]][] {
+  if (meaning.as === 'outcome') {
+    const { present, absent, indeterminate } = meaning
+    return Object.entries({ present, absent, indeterminate })
+  }
+  if (meaning.as === 'sex') {
+    const { F, M, other, unknown } = meaning
+    return Object.entries({ F, M, other, unknown })
+  }
+  return []
+}
+
+/** The first of the words that stands on no side, or null. */
+function codingProblem(meaning: ColumnMeaning, words: readonly string[]): string | null {
+  const known = new Set(sidesOf(meaning).flatMap(([, each]) => each.map(plainWord)))
+  return words.find((word) => !known.has(plainWord(word))) ?? null
+}
