@@ -1,12 +1,14 @@
+import { analysisRoutes } from './features/analyses/analyses.routes.ts'
 import { analyteRoutes } from './features/analytes/analytes.routes.ts'
 import { auditEventRoutes } from './features/auditEvents/auditEvents.routes.ts'
 import { datasetRoutes } from './features/datasets/datasets.routes.ts'
-import { lockRoutes } from './features/locks/locks.routes.ts'
 import { importRoutes } from './features/imports/imports.routes.ts'
+import { lockRoutes } from './features/locks/locks.routes.ts'
 import { meRoutes } from './features/me/me.routes.ts'
 import { memberRoutes } from './features/members/members.routes.ts'
 import { protocolRoutes } from './features/protocol/protocol.routes.ts'
 import { referenceRoutes } from './features/reference/reference.routes.ts'
+import { reportRoutes } from './features/reports/reports.routes.ts'
 import { sessionRoutes } from './features/sessions/sessions.routes.ts'
 import { siteRoutes } from './features/sites/sites.routes.ts'
 import { studyRoutes } from './features/studies/studies.routes.ts'
@@ -15,15 +17,17 @@ import type { Route } from './http/route.ts'
 
 /** Every route of the API. The permission test walks this list. */
 export const ROUTES: readonly Route[] = [
+  ...analysisRoutes,
   ...auditEventRoutes,
   ...meRoutes,
   ...analyteRoutes,
   ...datasetRoutes,
+  ...importRoutes,
   ...lockRoutes,
   ...memberRoutes,
   ...protocolRoutes,
-  ...importRoutes,
   ...referenceRoutes,
+  ...reportRoutes,
   ...sessionRoutes,
   ...siteRoutes,
   ...studyRoutes,

@@ -282,6 +282,13 @@ export const POLICY = {
     whenLocked: 'allow',
     records: 'analysis.run',
   },
+  'analysis.repeat': {
+    effect: 'write',
+    grants: [analyst('study')],
+    reveals: 'linked',
+    whenLocked: 'allow',
+    records: 'analysis.repeated',
+  },
 
   'report.list': { effect: 'read', grants: team, reveals: 'none' },
   'report.readOpen': {

@@ -87,9 +87,10 @@ export function makers(database: Database) {
     await database.insert(studyGuards).values({ studyId: id, lockedAt: null })
     await database.insert(auditChains).values({ id, count: 0, headHash: '0'.repeat(64) })
     const document = options.protocol ?? inventedProtocol
+    const protocolVersionId = randomUUID()
     await database.insert(protocolVersions).values({
       ...base,
-      id: randomUUID(),
+      id: protocolVersionId,
       number: 1,
       document,
       documentHash: sha256Hex(JSON.stringify(document)),
@@ -113,7 +114,7 @@ export function makers(database: Database) {
     const ammonia = { ...base, id: randomUUID(), key: 'ammonia', name: 'Ammonia', unit: '[ppb]' }
     const acetone = { ...base, id: randomUUID(), key: 'acetone', name: 'Acetone', unit: '[ppb]' }
     await database.insert(analytes).values([ammonia, acetone])
-    const made = { id, code, north, south, ammonia, acetone }
+    const made = { id, code, north, south, ammonia, acetone, protocolVersionId }
     if (options.locked) await lock(made)
     return made
   }

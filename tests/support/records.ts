@@ -7,9 +7,32 @@ import { jobs } from '#db/schema/jobs.ts'
 import { locks } from '#db/schema/locks.ts'
 import { reports } from '#db/schema/reports.ts'
 import type { Of, TargetKey } from '#server/changes/targets.ts'
+import type { AnalysisResult } from '#shared/schemas/analysis.ts'
 import type { makers } from './makers.ts'
 
 type Given = ReturnType<typeof makers>
+
+/** The result of an analysis of nobody. */
+const noResult: AnalysisResult = {
+  kind: 'accuracy',
+  analyteName: 'Ammonia',
+  unit: '[ppb]',
+  counts: {
+    subjects: 0,
+    present: 0,
+    absent: 0,
+    values: 0,
+    severalSessions: 0,
+    belowLod: 0,
+    leftOut: [],
+  },
+  area: null,
+  areaWithheld: 'Nobody is in it.',
+  curve: { thresholds: [], truePositives: [], falsePositives: [] },
+  rules: [],
+  plannedCutOff: null,
+  atCutOff: null,
+}
 
 /**
  * One record of every kind that a route may be about, in one study, at its first site. Empty of
@@ -59,7 +82,7 @@ export async function oneOfEach(
     id: made.datasetId,
     lockId: made.lockId,
     frozenAt: base.createdAt,
-    protocolVersionId: key(),
+    protocolVersionId: study.protocolVersionId,
     subjectCount: 0,
     rowCount: 0,
     hash,
@@ -100,7 +123,7 @@ export async function oneOfEach(
     protocolVersion: 1,
     statisticsVersion: '0',
     seed: 1,
-    result: '{}',
+    result: JSON.stringify(noResult),
     resultHash: hash,
     runBy: key(),
     runAt: base.createdAt,

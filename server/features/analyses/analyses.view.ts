@@ -1,0 +1,26 @@
+import { asProtocol } from '#shared/analyses/asProtocol.ts'
+import { type Analysis, type AnalysisSummary, analysisResult } from '#shared/schemas/analysis.ts'
+import { CAUTIONS } from '#shared/terms/cautions.ts'
+import type { AnalysisRow, AnalysisSummaryRow } from './analyses.reads.ts'
+
+export function toAnalysisSummary(row: AnalysisSummaryRow): AnalysisSummary {
+  const line = row.kind === 'accuracy' ? row.area : row.bias
+  const unit = row.kind === 'agreement' ? row.unit : null
+  return {
+    ...row,
+    runAt: row.runAt.toISOString(),
+    runByName: row.runByName ?? '',
+    headline: line && { ...line, unit },
+    caution: CAUTIONS[row.protocol.regulatoryStatus],
+  }
+}
+
+export const toAnalysis = (row: AnalysisRow): Analysis => ({
+  ...row,
+  ...toAnalysisSummary(row),
+  result: analysisResult.parse(JSON.parse(row.result)),
+  asProtocol: asProtocol(row.protocol, row.parameters),
+  targetCondition: row.protocol.targetCondition,
+  referenceStandard: row.protocol.referenceStandard,
+  frozenAt: row.frozenAt.toISOString(),
+})
