@@ -42,6 +42,6 @@ function serveClient(app: Express, folder: string): void {
   )
   app.use(express.static(folder, { index: false, maxAge: 0 }))
   app.get('/{*path}', noStore, (_request, response) => {
-    response.sendFile(join(folder, 'index.html'))
+    response.sendFile('index.html', { root: folder })
   })
 }

@@ -4,6 +4,7 @@ import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import type { TestProject } from 'vitest/node'
 import { type LocalMariaDb, startLocalMariaDb } from '#db/localMariaDb.ts'
+import { isAlive } from './stackIsAlive.ts'
 
 declare module 'vitest' {
   export interface ProvidedContext {
@@ -47,14 +48,5 @@ function removeAbandoned(): void {
     const owner = Number(/^breathmark-test-(\d+)-/.exec(name)?.[1])
     if (!owner || isAlive(owner)) continue
     rmSync(join(tmpdir(), name), { recursive: true, force: true })
-  }
-}
-
-function isAlive(pid: number): boolean {
-  try {
-    process.kill(pid, 0)
-    return true
-  } catch (error) {
-    return (error as NodeJS.ErrnoException).code === 'EPERM'
   }
 }
