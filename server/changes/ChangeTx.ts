@@ -165,7 +165,7 @@ export class ChangeTx {
     this.happenings.push({
       event: this.#event,
       recordType: audited.record,
-      recordId: String(row.id),
+      recordId: audited.key?.(row) ?? String(row.id),
       recordLabel: audited.label?.(row) ?? null,
       recordSiteId: (row.siteId as string | null | undefined) ?? this.allowed.siteId,
       fields,

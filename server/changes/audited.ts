@@ -27,6 +27,8 @@ export type Audited = {
   informationClass: InformationClass
   /** Fields of another class than the record's. */
   classes?: Record<string, InformationClass>
+  /** The key of the record, where it is not the row's own. */
+  key?: (row: Row) => string
   /** What a reader calls the record; never a value that tells anything. */
   label?: (row: Row) => string
   /** Fields that add nothing to the trail: keys, bytes, and what a hash beside them stands for. */
@@ -114,6 +116,7 @@ const AUDITED = new Map<MySqlTable, Audited>([
     {
       record: 'reportFile',
       informationClass: 'none',
+      key: (row) => String(row.reportId),
       label: (row) => `${row.part} part`,
       omit: ['bytes'],
     },

@@ -1,0 +1,114 @@
+import type { ReportBlock, ReportDocument, ReportSection } from '#server/reports/reportDocument.ts'
+import type { AnalysisResult } from '#shared/schemas/analysis.ts'
+import { METHODS } from '#shared/statistics/METHODS.ts'
+import { ANALYSIS_BADGE_LABELS, ANALYSIS_KIND_LABELS } from '#shared/terms/analysis.ts'
+import { unitLabel } from '#shared/terms/gases.ts'
+import { formatEstimate, formatInterval } from '#shared/terms/numbers.ts'
+import { agreementDecimals, lineTexts } from '#shared/terms/resultText.ts'
+import type { ReportSource, StoredAnalysis } from '../reportSource.ts'
+import { accuracyBlocks } from './accuracyBlocks.tsx'
+import { agreementBlocks } from './agreementBlocks.tsx'
+import { analysisFacts, countedInWords } from './analysisFacts.ts'
+import { reportFrame, shownOfRun } from './reportFrame.ts'
+
+const NEW_PAGE: ReportBlock = { kind: 'pageBreak' }
+
+/** The part for oversight and analysts: each chosen stored analysis with its figures and numbers. */
+export function closedPart(source: ReportSource): ReportDocument {
+  const sections = source.analyses.map((analysis, at) => {
+    const isLast = at === source.analyses.length - 1
+    return analysisSection(source, analysis, isLast ? [] : [NEW_PAGE])
+  })
+  return reportFrame(source, 'closed', [
+    summarySection(source),
+    ...sections,
+    methodsSection(source),
+  ])
+}
+
+/** One line for each analysis, on a page of its own. */
+function summarySection(source: ReportSource): ReportSection {
+  const { protocol } = source.dataset
+  return {
+    heading: 'What is shown',
+    blocks: [
+      {
+        kind: 'paragraph',
+        text: `${shownOfRun(source.analyses.length, source.analysesRun)}. Every number is the stored one; each estimate stands with what it was counted from and its interval.`,
+      },
+      {
+        kind: 'keyValues',
+        pairs: [
+          { label: 'Target condition', value: protocol.targetCondition },
+          { label: 'Reference standard', value: protocol.referenceStandard },
+        ],
+      },
+      {
+        kind: 'table',
+        columns: [
+          { label: 'Analysis' },
+          { label: 'Counted' },
+          { label: 'Result with its interval' },
+        ],
+        rows: source.analyses.map((analysis) => [
+          `${analysis.number}. ${analysis.title}\n${ANALYSIS_KIND_LABELS[analysis.kind]}, ${ANALYSIS_BADGE_LABELS[analysis.badge].toLowerCase()}`,
+          countedInWords(analysis.result),
+          headlineOf(analysis.result),
+        ]),
+      },
+      NEW_PAGE,
+    ],
+  }
+}
+
+function headlineOf(result: AnalysisResult): string {
+  if (result.kind === 'agreement') {
+    const { estimate, interval } = lineTexts(result.bias, agreementDecimals(result.sd))
+    return `Bias ${estimate} ${unitLabel(result.unit)}\n(${interval})`
+  }
+  const { area } = result
+  return area
+    ? `Area ${formatEstimate(area.estimate)}\n(${formatInterval(area.lower, area.upper)})`
+    : 'No area is given'
+}
+
+function analysisSection(
+  source: ReportSource,
+  analysis: StoredAnalysis,
+  end: readonly ReportBlock[],
+): ReportSection {
+  const { result } = analysis
+  return {
+    heading: `${analysis.number}. ${analysis.title}`,
+    blocks: [
+      ...analysisFacts(source, analysis),
+      ...(result.kind === 'accuracy'
+        ? accuracyBlocks(source, analysis, result)
+        : agreementBlocks(source, analysis, result)),
+      ...end,
+    ],
+  }
+}
+
+/** Name and source of every method that an interval in this part was computed by. */
+function methodsSection({ analyses }: ReportSource): ReportSection {
+  const used = new Set(analyses.flatMap(({ result }) => methodNames(result)))
+  const rows = Object.values(METHODS)
+    .filter(({ name }) => used.has(name))
+    .map(({ name, source }) => [name, source])
+  const versions = [...new Set(analyses.map((analysis) => analysis.statisticsVersion))].join(', ')
+  const blocks: ReportBlock[] = [
+    { kind: 'paragraph', text: `Computed with statistics version ${versions}.` },
+  ]
+  if (rows.length > 0)
+    blocks.unshift({ kind: 'table', columns: [{ label: 'Method' }, { label: 'Source' }], rows })
+  return { heading: 'Methods of the intervals', blocks }
+}
+
+function methodNames(result: AnalysisResult): string[] {
+  if (result.kind === 'agreement') return [result.biasMethod, result.limitsMethod]
+  return [
+    ...(result.area ? [result.area.method] : []),
+    ...(result.atCutOff?.measures.map((measure) => measure.method) ?? []),
+  ]
+}

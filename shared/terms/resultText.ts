@@ -1,0 +1,59 @@
+import type { Measure } from './analysis.ts'
+import { formatEstimate, formatFraction, formatInterval } from './numbers.ts'
+
+/** How results are written: one wording for the screen and the printed page. */
+type MeasureFigures = {
+  measure: Measure
+  numerator: number | null
+  denominator: number | null
+  estimate: number | null
+  lower: number | null
+  upper: number | null
+}
+
+const RATIOS: readonly Measure[] = [
+  'likelihoodRatioPositive',
+  'likelihoodRatioNegative',
+  'diagnosticOddsRatio',
+]
+
+/** Proportions carry three decimals, ratios two. */
+const decimalsOf = (measure: Measure): number => (RATIOS.includes(measure) ? 2 : 3)
+
+/** n/N (blank where it is no proportion), estimate and interval of one measure. */
+export function measureTexts(row: MeasureFigures): {
+  fraction: string
+  estimate: string
+  interval: string
+} {
+  const decimals = decimalsOf(row.measure)
+  const { numerator, denominator } = row
+  return {
+    fraction:
+      numerator === null || denominator === null ? '' : formatFraction(numerator, denominator),
+    estimate: formatEstimate(row.estimate, decimals),
+    interval: formatInterval(row.lower, row.upper, decimals),
+  }
+}
+
+/** "95 % interval" from the confidence level 0.95; up to one decimal. */
+export const intervalHeading = (confidence: number): string =>
+  `${Number((confidence * 100).toFixed(1))} % interval`
+
+/**
+ * Bias, limits and their bounds carry the same decimals, so that they can be compared by eye: as many
+ * as give the standard deviation of the differences three significant digits.
+ */
+export function agreementDecimals(sd: number): number {
+  if (!(sd > 0)) return 2
+  return Math.min(6, Math.max(0, 2 - Math.floor(Math.log10(sd))))
+}
+
+/** One line of an agreement with its interval, in the analyte's unit. */
+export const lineTexts = (
+  line: { estimate: number; lower: number | null; upper: number | null },
+  decimals: number,
+): { estimate: string; interval: string } => ({
+  estimate: formatEstimate(line.estimate, decimals),
+  interval: formatInterval(line.lower, line.upper, decimals),
+})
