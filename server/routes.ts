@@ -3,6 +3,7 @@ import { analyteRoutes } from './features/analytes/analytes.routes.ts'
 import { auditEventRoutes } from './features/auditEvents/auditEvents.routes.ts'
 import { datasetRoutes } from './features/datasets/datasets.routes.ts'
 import { importRoutes } from './features/imports/imports.routes.ts'
+import { jobRoutes } from './features/jobs/jobs.routes.ts'
 import { lockRoutes } from './features/locks/locks.routes.ts'
 import { meRoutes } from './features/me/me.routes.ts'
 import { memberRoutes } from './features/members/members.routes.ts'
@@ -23,6 +24,7 @@ export const ROUTES: readonly Route[] = [
   ...analyteRoutes,
   ...datasetRoutes,
   ...importRoutes,
+  ...jobRoutes,
   ...lockRoutes,
   ...memberRoutes,
   ...protocolRoutes,
