@@ -30,7 +30,11 @@ export function binormalArea({ present, absent, direction }: Classes): BinormalA
     const one = moments(a)
     const two = moments(b)
     const variance = one.sd * one.sd + two.sd * two.sd
-    return variance > 0 ? normalCdf((sign * (one.mean - two.mean)) / Math.sqrt(variance)) : null
+    const gap = sign * (one.mean - two.mean)
+    if (variance > 0) return normalCdf(gap / Math.sqrt(variance))
+    // two constant classes are told apart with certainty, unless they are the same constant
+    if (gap === 0) return null
+    return gap > 0 ? 1 : 0
   }
   const raw = areaOf(present, absent)
   const positive = allPositive(present) && allPositive(absent)

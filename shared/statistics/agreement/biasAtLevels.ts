@@ -16,7 +16,7 @@ export type BiasAtLevel = {
 /**
  * Systematic difference at decision levels: the Deming line of y on x at each level, less the level, with
  * a jackknife interval.
- * @param x the reference, y the sensor, n ≥ 4 pairs in one unit  @param levels values of x
+ * @param x the reference, y the sensor, n ≥ 3 pairs in one unit  @param levels values of x
  * @throws StatisticsError as demingRegression
  * Source: CLSI EP09-A3 (2013), estimation of bias at medical decision levels; jackknife Linnet 1993.
  */

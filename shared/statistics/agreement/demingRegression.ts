@@ -23,7 +23,7 @@ type Sums = { n: number; x: number; y: number; xx: number; yy: number; xy: numbe
 /**
  * Deming regression of y on x, both with error; standard errors from jackknife pseudo-values, intervals
  * estimate ∓ t(n − 2)·SE.
- * @param x, y n ≥ 4 pairs  @param options `errorVarianceRatio` var(error y)/var(error x), 1 unless given
+ * @param x, y n ≥ 3 pairs  @param options `errorVarianceRatio` var(error y)/var(error x), 1 unless given
  * @throws StatisticsError 'too-few', 'unequal-length', 'non-finite', 'constant', 'out-of-range'
  * Source: Linnet 1990, Stat Med 9:1463; 1993, Clin Chem 39:424.
  */
@@ -34,7 +34,7 @@ export function demingRegression(
 ): DemingRegression {
   const n = x.length
   if (y.length !== n) throw new StatisticsError('unequal-length', 'Each x needs its y.')
-  if (n < 4) throw new StatisticsError('too-few', 'Deming regression needs at least 4 pairs.')
+  if (n < 3) throw new StatisticsError('too-few', 'Deming regression needs at least 3 pairs.')
   requireFinite(x, 'The x values')
   requireFinite(y, 'The y values')
   if (!(errorVarianceRatio > 0 && Number.isFinite(errorVarianceRatio))) {

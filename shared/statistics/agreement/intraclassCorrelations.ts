@@ -6,7 +6,8 @@ import { requireProbability } from '../requireProbability.ts'
 import { StatisticsError } from '../StatisticsError.ts'
 
 export type IntraclassCorrelation = {
-  estimate: number
+  /** Null where the mean square between subjects, by which means of k divide, is 0. */
+  estimate: number | null
   /** Null where the F ratio has no bound (no error left at all). */
   lower: number | null
   upper: number | null
@@ -50,9 +51,9 @@ export function intraclassCorrelations(
   const interval2 = agreementInterval(squares, single2, tail)
   const ofMean = (r: number | null) => (r === null ? null : (k * r) / (1 + (k - 1) * r))
   const single = (f: number | null) => (f === null ? null : (f - 1) / (f + k - 1))
-  const mean = (f: number | null) => (f === null ? null : 1 - 1 / f)
+  const mean = (f: number | null) => (f === null || f === 0 ? null : 1 - 1 / f)
   const build = (
-    estimate: number,
+    estimate: number | null,
     test: ReturnType<typeof ratioTest>,
     lower: number | null,
     upper: number | null,
@@ -61,14 +62,14 @@ export function intraclassCorrelations(
     single1: build((msb - msw) / (msb + (k - 1) * msw), f1, single(f1.low), single(f1.high)),
     single2: build(single2, f3, interval2.lower, interval2.upper),
     single3: build((msb - mse) / (msb + (k - 1) * mse), f3, single(f3.low), single(f3.high)),
-    mean1: build((msb - msw) / msb, f1, mean(f1.low), mean(f1.high)),
+    mean1: build(msb === 0 ? null : (msb - msw) / msb, f1, mean(f1.low), mean(f1.high)),
     mean2: build(
-      (msb - mse) / (msb + (msj - mse) / n),
+      msb === 0 ? null : (msb - mse) / (msb + (msj - mse) / n),
       f3,
       ofMean(interval2.lower),
       ofMean(interval2.upper),
     ),
-    mean3: build((msb - mse) / msb, f3, mean(f3.low), mean(f3.high)),
+    mean3: build(msb === 0 ? null : (msb - mse) / msb, f3, mean(f3.low), mean(f3.high)),
   }
 }
 

@@ -63,7 +63,8 @@ export function passingBablokRegression(
     throw new StatisticsError('constant', 'The points give no slope to take a median of.')
   }
   const half = zFor(level) * Math.sqrt((n * (n - 1) * (2 * n + 5)) / 18)
-  const lowerRank = Math.round((slopes - half) / 2)
+  // + 0: a rank just below 0 must not come out as −0
+  const lowerRank = Math.round((slopes - half) / 2) + 0
   const upperRank = slopes - lowerRank + 1
   const middle = slopes % 2 === 1 ? [(slopes + 1) / 2] : [slopes / 2, slopes / 2 + 1]
   const wanted = [...middle, lowerRank, upperRank].map((rank) => rank + offset)

@@ -5,6 +5,7 @@ import { requireCount } from '../requireCount.ts'
 
 export type McnemarTest = {
   exactP: number
+  /** 1 − P(X = x)/2 where the discordant counts are equal; so 0.5, and no test, where there are none. */
   midP: number
   /** Null without any discordant subject. */
   chiSquared: number | null
@@ -32,7 +33,7 @@ export function mcnemarTest({
   if (n === 0) {
     const sentence = 'The two tests never disagree, so there is nothing to test.'
     const nothing = { chiSquared: null, p: null, chiSquaredContinuity: null }
-    return { exactP: 1, midP: 1, ...nothing, notDefined: { code: 'zero-denominator', sentence } }
+    return { exactP: 1, midP: 0.5, ...nothing, notDefined: { code: 'zero-denominator', sentence } }
   }
   const smaller = Math.min(firstOnly, secondOnly)
   const { cdf, mass } = fairBinomial(smaller, n)
