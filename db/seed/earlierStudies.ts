@@ -1,3 +1,4 @@
+import type { ColumnMeaning } from '#shared/schemas/import.ts'
 import type { StudyInput } from '#shared/schemas/study.ts'
 import { SeededRandom } from './random.ts'
 
@@ -6,7 +7,9 @@ export type DemonstrationStudy = {
   input: Omit<StudyInput, 'id'>
   csv: string
   /** What each column of the file means, by heading. */
-  meanings: Record<string, { as: string; [detail: string]: unknown }>
+  meanings: Record<string, ColumnMeaning>
+  /** Site by the word in the file, as its prefix. */
+  siteWords: Record<string, string>
   locked: boolean
 }
 
@@ -57,8 +60,8 @@ function ammoniaRows(count: number, seed: number): string {
 const MEANINGS: DemonstrationStudy['meanings'] = {
   row: { as: 'subject' },
   site: { as: 'site' },
-  sex: { as: 'sex' },
-  age: { as: 'ageYears' },
+  sex: { as: 'sex', F: ['F'], M: ['M'], other: [], unknown: [] },
+  age: { as: 'ageYears', andOver: null },
   ammonia_ppb: { as: 'sensorValue', analyteKey: 'ammonia' },
   below_lod: { as: 'belowLod', analyteKey: 'ammonia' },
   acetone_ppb: { as: 'sensorValue', analyteKey: 'acetone' },
@@ -70,6 +73,8 @@ const MEANINGS: DemonstrationStudy['meanings'] = {
     indeterminate: ['indeterminate'],
   },
 }
+
+const SITE_WORDS = { north: 'N04', south: 'N02', harbour: 'H11' }
 
 const setUp = (code: string, title: string): DemonstrationStudy['input'] => ({
   kind: 'earlierData',
@@ -114,12 +119,14 @@ export const DEMONSTRATION_STUDIES: readonly DemonstrationStudy[] = [
     input: setUp('LARK-1', 'Exhaled ammonia in suspected advanced liver fibrosis, earlier data'),
     csv: ammoniaRows(240, 20_261_130),
     meanings: MEANINGS,
+    siteWords: SITE_WORDS,
     locked: true,
   },
   {
     input: setUp('LARK-0', 'Exhaled ammonia, pilot series, data still open'),
     csv: ammoniaRows(60, 7_316),
     meanings: MEANINGS,
+    siteWords: SITE_WORDS,
     locked: false,
   },
 ]

@@ -89,10 +89,6 @@ export async function startStack(options: StackOptions): Promise<Stack> {
       ),
     )
     const env = { ...options.env, ...apiEnvironment(options, publicUrl, database, secrets) }
-    if (options.demoData && !existsSync(demoDataMark(folder)))
-      await step('demonstration data', () =>
-        makeDemoData({ env, database, people, folder, logFolder, signal }),
-      )
     await step('mail catcher', () =>
       run('mail catcher', typescript('server/local/mailCatcher.ts'), {
         MAIL_CATCHER_SMTP_PORT: String(ports.smtp),
@@ -109,6 +105,8 @@ export async function startStack(options: StackOptions): Promise<Stack> {
           BREATHMARK_API_PORT: String(ports.api),
         }),
       )
+    if (options.demoData && !existsSync(demoDataMark(folder)))
+      await step('demonstration data', () => makeDemoData({ publicUrl, folder, logFolder, signal }))
     const broken = Promise.race(
       parts.map((part) => part.ended.then(() => `The ${part.name} ended; see ${logFolder}.`)),
     )
@@ -169,25 +167,18 @@ function apiEnvironment(
 
 const peopleOf = (idp: Child): Stack['people'] => (idp.said as Pick<Stack, 'people'>).people
 const demoDataMark = (folder: string) => join(folder, 'demo-data.made')
-const SEED = join(import.meta.dirname, '../../db/seed/seed.ts')
 
-/** The seed runs as its owner's program; it must be able to begin again after a break. */
+/** Played through the product's own doors; a run that was broken off is completed by the next. */
 async function makeDemoData(options: {
-  env: Record<string, string>
-  database: LocalMariaDb
-  people: Stack['people']
+  publicUrl: string
   folder: string
   logFolder: string
   signal: AbortSignal
 }): Promise<void> {
-  const { folder, logFolder, signal } = options
-  if (!existsSync(SEED)) return
-  const env = {
-    ...options.env,
-    BREATHMARK_MIGRATE_DATABASE_URL: options.database.migrateUrl,
-    BREATHMARK_DEMO_PEOPLE: JSON.stringify(options.people),
-  }
+  const { publicUrl, folder, logFolder, signal } = options
   const name = 'demonstration data'
-  await finishChild({ name, arguments: typescript(SEED), env, logFolder, signal })
+  const program = typescript('server/local/demonstration.ts')
+  const env = { DEMONSTRATION_PRODUCT_URL: publicUrl }
+  await finishChild({ name, arguments: program, env, logFolder, signal })
   writeFileSync(demoDataMark(folder), new Date().toISOString())
 }

@@ -9,6 +9,8 @@ export const studyInput = z
   .object({
     id,
     kind: z.literal('earlierData'),
+    /** For teaching and trying out: said on every page that the data are invented. */
+    demonstration: z.boolean().optional(),
     code: z
       .string()
       .trim()

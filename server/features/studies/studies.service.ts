@@ -33,6 +33,7 @@ export async function createStudy(actor: Actor, input: StudyInput): Promise<Memb
       code,
       title,
       kind,
+      demonstration: input.demonstration ?? false,
       createdAt: tx.at,
       createdBy: actor.personId,
     })
