@@ -17,6 +17,14 @@ const PLAIN_PAGES: RouteObject[] = [
 
 /** Pages of a study; the first part of the path names its station. */
 const STUDY_PAGES: RouteObject[] = [
+  { path: 'protocol', lazy: page(() => import('../pages/ProtocolPage.tsx')) },
+  { path: 'protocol/amend', lazy: page(() => import('../pages/AmendProtocolPage.tsx')) },
+  { path: 'team', lazy: page(() => import('../pages/TeamPage.tsx')) },
+  { path: 'subjects', lazy: page(() => import('../pages/SubjectsPage.tsx')) },
+  { path: 'subjects/enrol', lazy: page(() => import('../pages/EnrolSubjectPage.tsx')) },
+  { path: 'subjects/:subjectId', lazy: page(() => import('../pages/SubjectPage.tsx')) },
+  { path: 'sessions', lazy: page(() => import('../pages/SessionsPage.tsx')) },
+  { path: 'reference', lazy: page(() => import('../pages/ReferencePage.tsx')) },
   { path: 'review', lazy: page(() => import('../pages/ReviewPage.tsx')) },
 ]
 
