@@ -1,5 +1,6 @@
 import type { z } from 'zod'
 import { ApiError, refusalFrom, unreachable } from './ApiError.ts'
+import { noteAnswer } from './lastAnswer.ts'
 import { tellSignedOut } from './signedOut.ts'
 
 export type Method = 'get' | 'post' | 'put' | 'patch' | 'delete'
@@ -15,8 +16,17 @@ export type RequestOptions = {
   signal?: AbortSignal
 }
 
-/** A page of another origin cannot set this header, so a write that carries it came from here. */
-const SAME_SITE_HEADER = { 'x-breathmark': '1' }
+/**
+ * A page of another origin cannot set these headers, so a write that carries them came from here. The
+ * offset from UTC goes to the audit trail beside the server's own time.
+ */
+const writeHeaders = () => ({ 'x-breathmark': '1', 'x-breathmark-offset': localOffset(new Date()) })
+
+function localOffset(now: Date): string {
+  const minutes = -now.getTimezoneOffset()
+  const two = (value: number) => String(Math.trunc(value)).padStart(2, '0')
+  return `${minutes < 0 ? '-' : '+'}${two(Math.abs(minutes) / 60)}:${two(Math.abs(minutes) % 60)}`
+}
 
 /**
  * Asks the server of this origin and parses its answer.
@@ -31,12 +41,13 @@ export async function request<S extends z.ZodType>(
   const response = await send(method, path, options)
   const body = await readBody(response)
   if (!response.ok) throw refused(response.status, body)
+  noteAnswer()
   return parse(schema, body, response.status)
 }
 
 async function send(method: Method, path: string, options: RequestOptions): Promise<Response> {
   const headers: Record<string, string> = { accept: 'application/json' }
-  if (method !== 'get') Object.assign(headers, SAME_SITE_HEADER)
+  if (method !== 'get') Object.assign(headers, writeHeaders())
   if (options.body !== undefined) headers['content-type'] = 'application/json'
   if (options.ifMatch !== undefined) headers['if-match'] = options.ifMatch
   try {
@@ -110,7 +121,7 @@ export function upload<S extends z.ZodType>(
     const xhr = new XMLHttpRequest()
     xhr.open('POST', path)
     xhr.setRequestHeader('accept', 'application/json')
-    for (const [name, value] of Object.entries(SAME_SITE_HEADER)) xhr.setRequestHeader(name, value)
+    for (const [name, value] of Object.entries(writeHeaders())) xhr.setRequestHeader(name, value)
     xhr.upload.onprogress = (event) => {
       if (event.lengthComputable) onProgress?.(event.loaded / event.total)
     }

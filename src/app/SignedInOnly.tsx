@@ -5,6 +5,7 @@ import { meQuery } from '../api/me.ts'
 import { ErrorNotice } from '../ui/ErrorNotice.tsx'
 import { PageHead } from '../ui/PageHead.tsx'
 import { SheetSkeleton } from '../ui/Skeleton.tsx'
+import { IdleWarning } from './IdleWarning.tsx'
 import { Landing } from './Landing.tsx'
 import { SignInAgain } from './SignInAgain.tsx'
 
@@ -16,6 +17,7 @@ export function SignedInOnly() {
       <>
         <Outlet />
         <SignInAgain />
+        <IdleWarning />
       </>
     )
   }

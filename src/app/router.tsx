@@ -23,9 +23,14 @@ const STUDY_PAGES: RouteObject[] = [
   { path: 'subjects', lazy: page(() => import('../pages/SubjectsPage.tsx')) },
   { path: 'subjects/enrol', lazy: page(() => import('../pages/EnrolSubjectPage.tsx')) },
   { path: 'subjects/:subjectId', lazy: page(() => import('../pages/SubjectPage.tsx')) },
+  { path: 'imports', lazy: page(() => import('../pages/ImportsPage.tsx')) },
+  { path: 'imports/new', lazy: page(() => import('../pages/ImportNewPage.tsx')) },
+  { path: 'imports/:importId', lazy: page(() => import('../pages/ImportPage.tsx')) },
   { path: 'sessions', lazy: page(() => import('../pages/SessionsPage.tsx')) },
   { path: 'reference', lazy: page(() => import('../pages/ReferencePage.tsx')) },
   { path: 'review', lazy: page(() => import('../pages/ReviewPage.tsx')) },
+  { path: 'reports', lazy: page(() => import('../pages/ReportsPage.tsx')) },
+  { path: 'reports/new', lazy: page(() => import('../pages/NewReportPage.tsx')) },
 ]
 
 const builtStations = new Set(STUDY_PAGES.map((route) => route.path?.split('/')[0] ?? ''))
