@@ -1,6 +1,6 @@
 import type { Delimiter, Meaning, Suspicion } from '#shared/schemas/import.ts'
 
-/** What a column may mean, in the order in which it is offered. */
+/** What a column may mean. */
 export const MEANING_LABELS: Record<Meaning, string> = {
   leaveOut: 'Left out',
   subject: 'Subject',
@@ -15,6 +15,14 @@ export const MEANING_LABELS: Record<Meaning, string> = {
   outcome: 'Reference outcome',
   covariate: 'Covariate',
 }
+
+/** The meanings as they are offered, beside leaving a column out. */
+export const MEANING_GROUPS: readonly { label: string; meanings: readonly Meaning[] }[] = [
+  { label: 'Whose row it is', meanings: ['subject', 'site', 'sessionNumber'] },
+  { label: 'About the subject', meanings: ['sex', 'ageYears', 'ageBand', 'covariate'] },
+  { label: 'Sensor', meanings: ['sensorValue', 'belowLod'] },
+  { label: 'Reference', meanings: ['referenceValue', 'outcome'] },
+]
 
 /** As in "This column looks like names". */
 export const SUSPICION_WORDS: Record<Suspicion, string> = {

@@ -1,3 +1,4 @@
+import { plainWord } from '#shared/terms/codeWords.ts'
 import { type AgeBand, ageBandOf, FIVE_YEAR_BANDS, OPEN_BANDS } from '#shared/terms/subject.ts'
 
 /**
@@ -14,9 +15,6 @@ export function readNumber(cell: string, decimal: '.' | ','): number | null {
   const value = Number(text.replace(',', '.'))
   return Number.isFinite(value) ? value : null
 }
-
-/** Words of a code are compared without regard to capitals. */
-export const plainWord = (word: string): string => word.normalize('NFC').toLowerCase()
 
 const YES = new Set(['1', 'yes', 'y', 'true', 't', 'x'])
 const NO = new Set(['0', 'no', 'n', 'false', 'f'])

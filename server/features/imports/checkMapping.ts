@@ -1,8 +1,7 @@
 import { AppError, refuseField } from '#shared/errors/AppError.ts'
 import type { ColumnMeaning, ImportColumn, ImportMapping } from '#shared/schemas/import.ts'
+import { plainWord, sidesOf } from '#shared/terms/codeWords.ts'
 import { MEANING_LABELS, SUSPICION_WORDS } from '#shared/terms/importColumn.ts'
-import { plainWord } from './cells.ts'
-import { sidesOf } from './columnWords.ts'
 
 export type MappingContext = {
   /** The file's columns under the delimiter that the mapping says. */

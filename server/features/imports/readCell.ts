@@ -6,8 +6,9 @@ import type {
   Meaning,
   MeaningOf,
 } from '#shared/schemas/import.ts'
+import { plainWord } from '#shared/terms/codeWords.ts'
 import { SUSPICION_WORDS } from '#shared/terms/importColumn.ts'
-import { bandOfAge, plainWord, readAgeBand, readNumber, readYesNo } from './cells.ts'
+import { bandOfAge, readAgeBand, readNumber, readYesNo } from './cells.ts'
 import {
   MOST_COVARIATE_CHARACTERS,
   MOST_SESSION_NUMBER,

@@ -1,6 +1,5 @@
 import type { ImportMapping, MappedColumn } from '#shared/schemas/import.ts'
-import { plainWord } from './cells.ts'
-import { sidesOf } from './columnWords.ts'
+import { plainWord, sidesOf } from '#shared/terms/codeWords.ts'
 import type { CsvRow } from './csvRows.ts'
 import { type Reading, type ReadRow, readCell } from './readCell.ts'
 

@@ -1,5 +1,5 @@
 import type { ColumnMeaning, MeaningOf, OPEN_AGES, Suspicion } from '#shared/schemas/import.ts'
-import { isCodedOutcome, outcomeCoding, sexCoding } from './columnWords.ts'
+import { isCodedOutcome, outcomeCoding, sexCoding } from '#shared/terms/codeWords.ts'
 
 export type LookedAt = {
   name: string

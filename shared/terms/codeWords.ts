@@ -1,5 +1,7 @@
 import type { ColumnMeaning, MeaningOf } from '#shared/schemas/import.ts'
-import { plainWord } from './cells.ts'
+
+/** Words of a code are compared without regard to capitals. */
+export const plainWord = (word: string): string => word.normalize('NFC').toLowerCase()
 
 type Coding = Record<string, readonly string[]>
 
