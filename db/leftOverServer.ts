@@ -4,7 +4,7 @@ import { setTimeout as wait } from 'node:timers/promises'
 import type { LocalMariaDbPaths } from './localMariaDbFiles.ts'
 import { SetUpError } from './SetUpError.ts'
 
-const LONGEST_STOP_MS = 60_000
+const LONGEST_STOP_MS = 30_000
 const launcherFile = (paths: LocalMariaDbPaths) => join(paths.folder, 'launcher.pid')
 
 /** Remembers who started the server of this folder. */
@@ -24,12 +24,22 @@ export async function stopLeftOver(paths: LocalMariaDbPaths): Promise<void> {
     throw new SetUpError(
       `Breathmark is already running from this folder (process ${server.parent}); stop that one first.`,
     )
-  process.kill(server.pid, 'SIGTERM')
-  const patience = AbortSignal.timeout(LONGEST_STOP_MS)
-  while (runningServer(paths)) {
-    if (patience.aborted)
-      throw new SetUpError(`An older MariaDB of this folder (process ${server.pid}) does not stop.`)
-    await wait(50)
+  await endProcess(() => runningServer(paths)?.pid)
+  if (runningServer(paths))
+    throw new SetUpError(`An older MariaDB of this folder (process ${server.pid}) does not stop.`)
+}
+
+/**
+ * Asks in good order, and ends a server that does not listen: one that is told to stop in the
+ * middle of its start can hang for ever. InnoDB loses nothing by it.
+ */
+async function endProcess(pid: () => number | undefined): Promise<void> {
+  for (const signal of ['SIGTERM', 'SIGKILL'] as const) {
+    const running = pid()
+    if (!running) return
+    process.kill(running, signal)
+    const until = Date.now() + LONGEST_STOP_MS
+    while (pid() && Date.now() < until) await wait(50)
   }
 }
 

@@ -1,5 +1,6 @@
 import { type ChildProcess, execFile, spawn } from 'node:child_process'
 import { existsSync, openSync, readFileSync, rmSync } from 'node:fs'
+import { dirname } from 'node:path'
 import { setTimeout as wait } from 'node:timers/promises'
 import { promisify } from 'node:util'
 import mysql from 'mysql2/promise'
@@ -74,7 +75,7 @@ export async function startLocalMariaDb(options: {
     redactUrl: url('redact'),
     pid: child.pid!,
     ended,
-    stop: () => stopServer(child, ended),
+    stop: () => stopServer(child, ended, paths),
   }
 }
 
@@ -139,11 +140,17 @@ async function untilReady(child: ChildProcess, paths: LocalMariaDbPaths, url: st
   }
 }
 
-async function stopServer(child: ChildProcess, ended: Promise<void>): Promise<void> {
+async function stopServer(
+  child: ChildProcess,
+  ended: Promise<void>,
+  paths: LocalMariaDbPaths,
+): Promise<void> {
   child.kill('SIGTERM')
   const late = setTimeout(() => child.kill('SIGKILL'), LONGEST_STOP_MS)
   await ended
   clearTimeout(late)
+  const socketFolder = dirname(paths.socket)
+  if (socketFolder !== paths.folder) rmSync(socketFolder, { recursive: true, force: true })
 }
 
 /** Debian puts the server where an ordinary user's PATH does not look. */

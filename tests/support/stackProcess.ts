@@ -1,5 +1,6 @@
 import { mkdirSync, mkdtempSync, readdirSync, rmSync } from 'node:fs'
 import { join } from 'node:path'
+import { SetUpError } from '#db/SetUpError.ts'
 import { buildProduct } from '#server/local/build.ts'
 import { freePorts } from '#server/local/localPorts.ts'
 import { startStack } from '#server/local/stack.ts'
@@ -46,6 +47,9 @@ try {
   const fault = await Promise.race([stack.broken, stopped])
   if (fault) console.error(fault)
   await stack.stop()
+} catch (error) {
+  console.error(error instanceof SetUpError ? error.message : error)
+  process.exitCode = 1
 } finally {
   rmSync(folder, { recursive: true, force: true })
   if (process.connected) process.disconnect()
