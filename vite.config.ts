@@ -10,6 +10,8 @@ export default defineConfig({
   server: {
     host: '127.0.0.1',
     strictPort: true,
+    // The local database writes there all the time.
+    watch: { ignored: ['**/.local/**', '**/test-results/**'] },
     proxy: { '/api': `http://127.0.0.1:${apiPort}`, '/auth': `http://127.0.0.1:${apiPort}` },
   },
   build: { outDir: 'dist/client', sourcemap: true },
