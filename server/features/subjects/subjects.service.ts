@@ -4,7 +4,7 @@ import type { Actor } from '#server/changes/actor.ts'
 import { change } from '#server/changes/change.ts'
 import { getSite } from '#server/features/sites/sites.reads.ts'
 import type { SubjectCorrection, SubjectInput } from '#shared/schemas/subject.ts'
-import { randomSubjectCode, takenCodes } from './newSubjectCode.ts'
+import { randomSubjectCode, takenCodes } from './subjectCodes.reads.ts'
 import { getSubject, type SubjectRow } from './subjects.reads.ts'
 
 /** Enrols a subject at a site under a new random code. */

@@ -11,7 +11,7 @@ import { newMeaning } from './newMeaning.ts'
 type MappingRowProps = { index: number; column: FoundColumn; analytes: readonly Analyte[] }
 
 export const MAPPING_GRID =
-  'wide:grid wide:grid-cols-[minmax(0,1.1fr)_minmax(0,1.25fr)_minmax(0,1.15fr)_minmax(0,1.5fr)] wide:gap-x-5'
+  'tablet:grid tablet:grid-cols-2 tablet:gap-x-4 wide:grid-cols-[minmax(0,1.1fr)_minmax(0,1.25fr)_minmax(0,1.15fr)_minmax(0,1.5fr)] wide:gap-x-5'
 
 /** A column of the file: what stands in it, what it means, and what that needs. */
 export function MappingRow({ index, column, analytes }: MappingRowProps) {
@@ -31,7 +31,7 @@ export function MappingRow({ index, column, analytes }: MappingRowProps) {
           </p>
         )}
       </div>
-      <p className="min-w-0 text-sm text-ink-2 max-wide:mt-1 wide:pt-2.5">
+      <p className="min-w-0 text-sm text-ink-2 max-tablet:mt-1 tablet:max-wide:text-right wide:pt-2.5">
         {column.suspicion ? 'Not shown.' : <Samples column={column} />}
       </p>
       <div className="min-w-0 max-wide:mt-2">

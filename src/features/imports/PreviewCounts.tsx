@@ -31,9 +31,9 @@ export function PreviewCounts({ counts }: { counts: ImportCounts }) {
         <p className="max-w-[80ch] text-ink-2">
           Missing values, kept as missing:{' '}
           {counts.blanks.map(({ column, rows }, index) => (
-            <span key={column} className="whitespace-nowrap">
-              {index > 0 && '· '}
-              {column} {formatCount(rows)}{' '}
+            <span key={column}>
+              {index > 0 && ' · '}
+              {column} {formatCount(rows)}
             </span>
           ))}
         </p>

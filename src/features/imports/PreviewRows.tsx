@@ -54,10 +54,15 @@ export function PreviewRows(props: PreviewRowsProps) {
 const firstFate = ({ counts }: DataImport): RowFate =>
   counts && counts.new === 0 && counts.refused > 0 ? 'refused' : 'new'
 
+/** Few enough that the button below stays in reach. */
+const ROWS_A_PAGE = '20'
+
 type PageProps = PreviewRowsProps & { table: TableParams }
 
 function useRows({ studyId, of, table }: PageProps, fate: RowFate) {
-  return useQuery(importRowsQuery(studyId, of.id, of.version, { ...table.request, fate }))
+  return useQuery(
+    importRowsQuery(studyId, of.id, of.version, { ...table.request, fate, limit: ROWS_A_PAGE }),
+  )
 }
 
 function Entries(props: PageProps & { fate: RowFate }) {
