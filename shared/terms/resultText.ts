@@ -1,5 +1,5 @@
 import type { Measure } from './analysis.ts'
-import { formatEstimate, formatFraction, formatInterval } from './numbers.ts'
+import { formatEstimate, formatFraction, formatInterval, NOT_ESTIMABLE } from './numbers.ts'
 
 /** How results are written: one wording for the screen and the printed page. */
 type MeasureFigures = {
@@ -32,21 +32,30 @@ export function measureTexts(row: MeasureFigures): {
     fraction:
       numerator === null || denominator === null ? '' : formatFraction(numerator, denominator),
     estimate: formatEstimate(row.estimate, decimals),
-    interval: formatInterval(row.lower, row.upper, decimals),
+    interval: intervalText(row, decimals),
   }
 }
 
-/** "95 % interval" from the confidence level 0.95; up to one decimal. */
+/** An estimate that stands without an interval says so; why is said beside the table. */
+function intervalText({ estimate, lower, upper }: MeasureFigures, decimals: number): string {
+  if (estimate === null) return NOT_ESTIMABLE
+  return lower === null || upper === null ? 'none' : formatInterval(lower, upper, decimals)
+}
+
+/** A number with its unit; alone where it has none. */
+export const withUnit = (text: string, unit: string): string => (unit ? `${text} ${unit}` : text)
+
+/** "95 % interval" from the confidence level 0.95. */
 export const intervalHeading = (confidence: number): string =>
-  `${Number((confidence * 100).toFixed(1))} % interval`
+  `${Number((confidence * 100).toFixed(2))} % interval`
 
 /**
  * Bias, limits and their bounds carry the same decimals, so that they can be compared by eye: as many
  * as give the standard deviation of the differences three significant digits.
  */
 export function agreementDecimals(sd: number): number {
-  if (!(sd > 0)) return 2
-  return Math.min(6, Math.max(0, 2 - Math.floor(Math.log10(sd))))
+  if (sd === 0) return 3
+  return Math.min(8, Math.max(0, 2 - Math.floor(Math.log10(sd))))
 }
 
 /** One line of an agreement with its interval, in the analyte's unit. */

@@ -3,6 +3,7 @@ import { useEffect, useMemo } from 'react'
 import { formatCount } from '#shared/terms/numbers.ts'
 import { meQuery } from '../api/me.ts'
 import { may, studyQuery, useStudy } from '../api/study.ts'
+import { ReportsUnderWay } from '../features/reports/ReportsUnderWay.tsx'
 import { reportColumns } from '../features/reports/reportColumns.tsx'
 import { reportsQuery } from '../features/reports/reports.api.ts'
 import { ButtonLink } from '../ui/ButtonLink.tsx'
@@ -18,7 +19,6 @@ export default function ReportsPage() {
   const study = useStudy()
   const me = useQuery(meQuery)
   const reports = useQuery(reportsQuery(study.id))
-  const readerId = me.data?.person.id
   const mayIssue = may(study, 'report.issue')
   const isFrozen = study.counts.locks > 0
   const issued = reports.data?.filter((report) => report.state === 'issued').length
@@ -28,11 +28,10 @@ export default function ReportsPage() {
     () =>
       reportColumns({
         studyId: study.id,
-        readerId,
         mayIssue: may(study, 'report.issue'),
         mayOpen: { open: may(study, 'report.readOpen'), closed: may(study, 'report.readClosed') },
       }),
-    [study, readerId],
+    [study],
   )
   const issueLink = <ButtonLink to={`/studies/${study.id}/reports/new`}>Issue a report</ButtonLink>
   return (
@@ -57,6 +56,11 @@ export default function ReportsPage() {
           </>
         }
       >
+        <ReportsUnderWay
+          studyId={study.id}
+          reports={reports.data ?? []}
+          readerId={me.data?.person.id}
+        />
         <DataTable
           caption="Reports, the newest first"
           columns={columns}

@@ -102,6 +102,9 @@ export async function countStudy(read: Reader, studyId: string) {
     locks: lockRows.filter((lock) => lock.state === 'approved').length,
     openLockRequest: lockRows.some((lock) => lock.state === 'requested'),
     analyses: await read.$count(analyses, eq(analyses.studyId, studyId)),
-    reports: await read.$count(reports, eq(reports.studyId, studyId)),
+    reports: await read.$count(
+      reports,
+      and(eq(reports.studyId, studyId), eq(reports.state, 'issued')),
+    ),
   }
 }

@@ -17,8 +17,10 @@ export function AuditTrailFilters({ params }: { params: TableParams }) {
       <TableChoice params={params} name="event" label="Event" options={EVENT_OPTIONS} />
       <TableSearch params={params} name="record" label="Record" width="w-36" />
       <TableSearch params={params} name="person" label="Person" width="w-36" />
-      <DayFilter params={params} name="from" label="From" />
-      <DayFilter params={params} name="to" label="To" />
+      <div className="flex flex-wrap gap-3">
+        <DayFilter params={params} name="from" label="From" />
+        <DayFilter params={params} name="to" label="To" />
+      </div>
     </>
   )
 }

@@ -16,7 +16,7 @@ export function standingOf({ role, duty, personSiteName }: AuditEvent): string {
 
 /** What an event keeps, in a few words. */
 export function valuesInWords(values: readonly AuditValue[]): string {
-  if (values.length === 0) return 'none'
+  if (values.length === 0) return 'no value'
   const hidden = values.filter((value) => value.hidden).length
   const all = `${formatCount(values.length)} ${values.length === 1 ? 'value' : 'values'}`
   if (hidden === 0) return all

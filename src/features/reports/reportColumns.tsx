@@ -7,7 +7,6 @@ import { ReportStateCell } from './ReportStateCell.tsx'
 
 type Reading = {
   studyId: string
-  readerId: string | undefined
   mayIssue: boolean
   mayOpen: { open: boolean; closed: boolean }
 }
@@ -37,12 +36,7 @@ export const reportColumns = (reading: Reading): TableColumn<Report>[] => [
     header: 'State',
     value: (report) => report.state,
     cell: (report) => (
-      <ReportStateCell
-        studyId={reading.studyId}
-        report={report}
-        own={report.issuedById === reading.readerId}
-        mayTryAgain={reading.mayIssue}
-      />
+      <ReportStateCell studyId={reading.studyId} report={report} mayTryAgain={reading.mayIssue} />
     ),
   },
   {

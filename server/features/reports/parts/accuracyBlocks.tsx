@@ -1,5 +1,6 @@
 import type { ReportBlock } from '#server/reports/reportDocument.ts'
 import { accuracyValues } from '#shared/analyses/accuracyValues.ts'
+import { cutOffLabel } from '#shared/analyses/cutOffLabel.ts'
 import { OutcomeStrip } from '#shared/figures/OutcomeStrip.tsx'
 import { RocCurve } from '#shared/figures/RocCurve.tsx'
 import type { RocCurvePoint, RocCutOff } from '#shared/figures/rocCurveTypes.ts'
@@ -12,9 +13,9 @@ import {
   formatInterval,
 } from '#shared/terms/numbers.ts'
 import { POSITIVE_RULES } from '#shared/terms/protocol.ts'
-import { intervalHeading } from '#shared/terms/resultText.ts'
+import { intervalHeading, withUnit } from '#shared/terms/resultText.ts'
 import type { ReportSource, StoredAnalysis } from '../reportSource.ts'
-import { cutOffBlocks, cutOffTable, cutOffWords } from './cutOffBlocks.ts'
+import { cutOffBlocks, cutOffTable } from './cutOffBlocks.ts'
 
 /** Area, curve, values by outcome, and what the cut-off tells. */
 export function accuracyBlocks(
@@ -92,7 +93,7 @@ function markOf(result: AccuracyResult, unit: string): RocCutOff {
   return {
     value: cutOff,
     unit,
-    label: cutOffWords(result, cutOff),
+    label: cutOffLabel(cutOff, result.plannedCutOff, result.rules),
     sensitivity: table.truePositives / (table.truePositives + table.falseNegatives),
     falsePositiveFraction: table.falsePositives / (table.falsePositives + table.trueNegatives),
   }
@@ -105,11 +106,17 @@ function stripBlock(
   id: string,
 ): ReportBlock {
   const { present, absent } = accuracyValues(rows, analyteKey, sessionRule)
-  const cutOff = result.atCutOff?.cutOff
   const unit = unitLabel(result.unit)
+  const mark = result.atCutOff && {
+    value: result.atCutOff.cutOff,
+    label: cutOffLabel(result.atCutOff.cutOff, result.plannedCutOff, result.rules),
+  }
+  const line = mark
+    ? ` The dashed line: ${withUnit(formatConcentration(mark.value), unit)}, ${mark.label}.`
+    : ''
   return {
     kind: 'figure',
-    caption: `Values of ${result.analyteName} by reference outcome: ${formatCount(present.length)} present (filled discs), ${formatCount(absent.length)} absent (open diamonds)${cutOff === undefined ? '' : `; the dashed line is the ${cutOffWords(result, cutOff)}, ${formatConcentration(cutOff)} ${unit}`}.`,
+    caption: `Values of ${result.analyteName} by reference outcome: ${formatCount(present.length)} present (filled discs), ${formatCount(absent.length)} absent (open diamonds).${line}`,
     figure: (
       <OutcomeStrip
         id={id}
@@ -118,9 +125,7 @@ function stripBlock(
         unit={unit}
         present={present}
         absent={absent}
-        {...(cutOff === undefined
-          ? {}
-          : { cutOff: { value: cutOff, label: cutOffWords(result, cutOff) } })}
+        {...(mark ? { cutOff: mark } : {})}
       />
     ),
   }

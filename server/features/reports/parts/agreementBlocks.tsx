@@ -5,7 +5,12 @@ import type { AgreementResult } from '#shared/schemas/analysis.ts'
 import { ACCEPTANCE_VERDICT_WORDS } from '#shared/terms/analysis.ts'
 import { unitLabel } from '#shared/terms/gases.ts'
 import { formatConcentration, formatCount, formatEstimate } from '#shared/terms/numbers.ts'
-import { agreementDecimals, intervalHeading, lineTexts } from '#shared/terms/resultText.ts'
+import {
+  agreementDecimals,
+  intervalHeading,
+  lineTexts,
+  withUnit,
+} from '#shared/terms/resultText.ts'
 import type { ReportSource, StoredAnalysis } from '../reportSource.ts'
 
 type Line = AgreementResult['bias']
@@ -18,20 +23,30 @@ export function agreementBlocks(
 ): ReportBlock[] {
   const { acceptance, bias, lowerLimit, upperLimit } = result
   const unit = unitLabel(result.unit)
+  const inUnit = unit ? ` (${unit})` : ''
   const decimals = agreementDecimals(result.sd)
   const pairs = agreementPairs(rows, parameters.analyteKey, parameters.sessionRule)
   return [
     {
       kind: 'subheading',
-      text: `Bias ${lineTexts(bias, decimals).estimate} ${unit} (${lineTexts(bias, decimals).interval})`,
+      text: `Bias ${withUnit(lineTexts(bias, decimals).estimate, unit)} (${lineTexts(bias, decimals).interval})`,
     },
     {
       kind: 'paragraph',
       quiet: true,
-      text: `Difference = sensor − reference. Standard deviation of the differences ${formatEstimate(result.sd, decimals)} ${unit}.`,
+      text: `Difference = sensor − reference. Standard deviation of the differences ${withUnit(formatEstimate(result.sd, decimals), unit)}.`,
     },
+    ...(acceptance
+      ? [
+          {
+            kind: 'paragraph' as const,
+            text: `Acceptable: ${formatConcentration(acceptance.lower)} to ${withUnit(formatConcentration(acceptance.upper), unit)}. ${ACCEPTANCE_VERDICT_WORDS[acceptance.verdict]}`,
+          },
+        ]
+      : []),
     {
       kind: 'figure',
+      share: 0.94,
       caption: `Difference against mean of ${formatCount(pairs.sensor.length)} pairs of ${result.analyteName} (Bland–Altman), with bias, limits of agreement and their intervals.`,
       figure: (
         <DifferencePlot
@@ -52,8 +67,8 @@ export function agreementBlocks(
       kind: 'table',
       columns: [
         { label: 'Line' },
-        { label: `Estimate (${unit})`, align: 'right' },
-        { label: `${intervalHeading(parameters.confidence)} (${unit})`, align: 'right' },
+        { label: `Estimate${inUnit}`, align: 'right' },
+        { label: `${intervalHeading(parameters.confidence)}${inUnit}`, align: 'right' },
         { label: 'Method' },
       ],
       rows: [
@@ -65,14 +80,6 @@ export function agreementBlocks(
         return [label, estimate, interval, method]
       }),
     },
-    ...(acceptance
-      ? [
-          {
-            kind: 'paragraph' as const,
-            text: `Acceptable: ${formatConcentration(acceptance.lower)} to ${formatConcentration(acceptance.upper)} ${unit}. ${ACCEPTANCE_VERDICT_WORDS[acceptance.verdict]}`,
-          },
-        ]
-      : []),
     ...result.caveats.map((text) => ({ kind: 'paragraph' as const, text, quiet: true })),
   ]
 }

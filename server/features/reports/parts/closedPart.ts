@@ -4,7 +4,7 @@ import { METHODS } from '#shared/statistics/METHODS.ts'
 import { ANALYSIS_BADGE_LABELS, ANALYSIS_KIND_LABELS } from '#shared/terms/analysis.ts'
 import { unitLabel } from '#shared/terms/gases.ts'
 import { formatEstimate, formatInterval } from '#shared/terms/numbers.ts'
-import { agreementDecimals, lineTexts } from '#shared/terms/resultText.ts'
+import { agreementDecimals, lineTexts, withUnit } from '#shared/terms/resultText.ts'
 import type { ReportSource, StoredAnalysis } from '../reportSource.ts'
 import { accuracyBlocks } from './accuracyBlocks.tsx'
 import { agreementBlocks } from './agreementBlocks.tsx'
@@ -15,18 +15,17 @@ const NEW_PAGE: ReportBlock = { kind: 'pageBreak' }
 
 /** The part for oversight and analysts: each chosen stored analysis with its figures and numbers. */
 export function closedPart(source: ReportSource): ReportDocument {
-  const sections = source.analyses.map((analysis, at) => {
-    const isLast = at === source.analyses.length - 1
-    return analysisSection(source, analysis, isLast ? [] : [NEW_PAGE])
-  })
   return reportFrame(source, 'closed', [
     summarySection(source),
-    ...sections,
     methodsSection(source),
+    ...source.analyses.map((analysis, at) => {
+      const isLast = at === source.analyses.length - 1
+      return analysisSection(source, analysis, isLast ? [] : [NEW_PAGE])
+    }),
   ])
 }
 
-/** One line for each analysis, on a page of its own. */
+/** One line for each analysis. */
 function summarySection(source: ReportSource): ReportSection {
   const { protocol } = source.dataset
   return {
@@ -56,7 +55,6 @@ function summarySection(source: ReportSource): ReportSection {
           headlineOf(analysis.result),
         ]),
       },
-      NEW_PAGE,
     ],
   }
 }
@@ -64,7 +62,7 @@ function summarySection(source: ReportSource): ReportSection {
 function headlineOf(result: AnalysisResult): string {
   if (result.kind === 'agreement') {
     const { estimate, interval } = lineTexts(result.bias, agreementDecimals(result.sd))
-    return `Bias ${estimate} ${unitLabel(result.unit)}\n(${interval})`
+    return `Bias ${withUnit(estimate, unitLabel(result.unit))}\n(${interval})`
   }
   const { area } = result
   return area
@@ -99,6 +97,7 @@ function methodsSection({ analyses }: ReportSource): ReportSection {
   const versions = [...new Set(analyses.map((analysis) => analysis.statisticsVersion))].join(', ')
   const blocks: ReportBlock[] = [
     { kind: 'paragraph', text: `Computed with statistics version ${versions}.` },
+    NEW_PAGE,
   ]
   if (rows.length > 0)
     blocks.unshift({ kind: 'table', columns: [{ label: 'Method' }, { label: 'Source' }], rows })

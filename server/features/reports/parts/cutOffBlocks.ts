@@ -1,4 +1,5 @@
 import type { ReportBlock, ReportTable } from '#server/reports/reportDocument.ts'
+import { cutOffLabel } from '#shared/analyses/cutOffLabel.ts'
 import type {
   AccuracyAtCutOffResult,
   AccuracyParameters,
@@ -8,11 +9,7 @@ import { ANALYSIS_BADGE_LABELS, CUT_OFF_RULE_LABELS, measureLabel } from '#share
 import { unitLabel } from '#shared/terms/gases.ts'
 import { formatConcentration, formatCount, formatEstimate } from '#shared/terms/numbers.ts'
 import { POSITIVE_RULES } from '#shared/terms/protocol.ts'
-import { intervalHeading, measureTexts } from '#shared/terms/resultText.ts'
-
-/** Whether a cut-off is the one of the protocol, in words. */
-export const cutOffWords = ({ plannedCutOff }: AccuracyResult, cutOff: number): string =>
-  cutOff === plannedCutOff ? 'planned cut-off' : 'exploratory cut-off'
+import { intervalHeading, measureTexts, withUnit } from '#shared/terms/resultText.ts'
 
 /** The protocol's cut-off and those that rules choose from the data, each with its standing. */
 export function cutOffTable(result: AccuracyResult, unit: string): ReportTable {
@@ -24,7 +21,7 @@ export function cutOffTable(result: AccuracyResult, unit: string): ReportTable {
           [
             ANALYSIS_BADGE_LABELS.planned,
             'by the protocol',
-            `${formatConcentration(plannedCutOff)} ${unit}`,
+            withUnit(formatConcentration(plannedCutOff), unit),
             ...plannedAccuracy(result),
           ],
         ]
@@ -45,7 +42,7 @@ export function cutOffTable(result: AccuracyResult, unit: string): ReportTable {
         `from these data: ${CUT_OFF_RULE_LABELS[rule]}`,
         preferred?.threshold == null
           ? 'nobody positive'
-          : `${formatConcentration(preferred.threshold)} ${unit}`,
+          : withUnit(formatConcentration(preferred.threshold), unit),
         formatEstimate(preferred?.sensitivity),
         formatEstimate(preferred?.specificity),
       ]),
@@ -74,12 +71,12 @@ export function cutOffBlocks(
   return [
     {
       kind: 'subheading',
-      text: `At ${formatConcentration(at.cutOff)} ${unit}, the ${cutOffWords(result, at.cutOff)}`,
+      text: `At ${withUnit(formatConcentration(at.cutOff), unit)} (${cutOffLabel(at.cutOff, result.plannedCutOff, result.rules)})`,
     },
     {
       kind: 'paragraph',
       quiet: true,
-      text: `${POSITIVE_RULES[direction]} ${formatConcentration(at.cutOff)} ${unit}.${isPlanned ? '' : ' It is not the planned cut-off, so what it shows is exploratory.'}`,
+      text: `${POSITIVE_RULES[direction]} ${withUnit(formatConcentration(at.cutOff), unit)}.${isPlanned ? '' : ' It is not the planned cut-off, so what it shows is exploratory.'}`,
     },
     twoByTwoTable(at.table),
     measuresTable(at, confidence, prevalence),

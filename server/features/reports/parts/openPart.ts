@@ -14,7 +14,6 @@ export function openPart(source: ReportSource): ReportDocument {
     completenessSection(source),
     ...(source.study.kind === 'earlierData' ? [importsSection(source)] : []),
     locksSection(source),
-    analysesSection(source),
   ])
 }
 
@@ -46,7 +45,7 @@ function importsSection({ imports }: ReportSource): ReportSection {
   }
 }
 
-function locksSection({ locks }: ReportSource): ReportSection {
+function locksSection({ locks, analyses, analysesRun }: ReportSource): ReportSection {
   const signed = locks.flatMap((lock) =>
     lock.signedAt
       ? [
@@ -59,7 +58,7 @@ function locksSection({ locks }: ReportSource): ReportSection {
       : [],
   )
   return {
-    heading: 'History of the lock',
+    heading: 'Lock and analyses',
     blocks: [
       {
         kind: 'table',
@@ -77,17 +76,6 @@ function locksSection({ locks }: ReportSource): ReportSection {
         ]),
       },
       ...signed,
-    ],
-  }
-}
-
-const whenAndWho = (at: Date, name: string | null): string =>
-  `${formatInstant(at.toISOString())}\n${name ?? 'by a person no longer known'}`
-
-function analysesSection({ analyses, analysesRun }: ReportSource): ReportSection {
-  return {
-    heading: 'Analyses',
-    blocks: [
       {
         kind: 'paragraph',
         text: `${shownOfRun(analyses.length, analysesRun)} in the closed part of this report, which goes to oversight monitors and analysts alone. This part holds no accuracy, no agreement, and no outcome split by a sensor value.`,
@@ -95,3 +83,6 @@ function analysesSection({ analyses, analysesRun }: ReportSource): ReportSection
     ],
   }
 }
+
+const whenAndWho = (at: Date, name: string | null): string =>
+  `${formatInstant(at.toISOString())}\n${name ?? 'by a person no longer known'}`
