@@ -61,7 +61,8 @@ export const protocolDocument = z
     sampling: z.enum(SAMPLINGS, { error: 'Please say how subjects came in.' }),
     regulatoryStatus: z.enum(REGULATORY_STATUSES),
     plannedSubjects: number.int('A whole number.').positive('Must be more than 0.').nullable(),
-    primaryAnalyteKey: analyteKey,
+    /** One of the biomarkers; judged once those are whole. */
+    primaryAnalyteKey: z.string().max(40),
     biomarkers: z.array(biomarker).min(1, 'At least one biomarker.').max(20, 'At most 20.'),
     acceptanceLimits: z.array(acceptanceLimits).max(20, 'At most 20.'),
   })

@@ -146,7 +146,12 @@ function fieldsOf(error: unknown): Record<string, string> {
 }
 
 function refusalOf(error: unknown): Refusal {
-  if (error instanceof ApiError) return { message: error.message, requestId: error.requestId }
+  if (error instanceof ApiError)
+    // A refusal explains itself; only a fault is for somebody else to look up.
+    return {
+      message: error.message,
+      requestId: error.status >= 500 ? error.requestId : undefined,
+    }
   console.error(error)
   return { message: 'Something went wrong in this page. Nothing was saved.' }
 }

@@ -87,8 +87,8 @@ function Amendment({ newest, analytes }: AmendmentProps) {
         <div className="mb-5">
           <Notice tone="stop" title={`Version ${newest.number} was made meanwhile`} announce>
             <p>
-              {newest.createdByName} made it{newest.reason ? `: ${newest.reason}` : '.'} What you
-              typed is still here.{' '}
+              By {newest.createdByName}
+              {newest.reason ? `, because “${newest.reason}”` : ''}. What you typed is still here.{' '}
               <a href={back} target="_blank" rel="noopener">
                 Look at version {newest.number} in a new tab
               </a>

@@ -20,6 +20,8 @@ import { TableChoice, TableSearch } from '../ui/TableFilters.tsx'
 import { useTableParams } from '../ui/useTableParams.ts'
 
 const FILTERS = ['code', 'siteId', 'outcome'] as const
+/** With more columns than this the table scrolls in a box of its own. */
+const WIDE_FROM = 8
 
 /** Outcomes and the reference analyser's values, by subject, as they were entered. */
 export default function ReferencePage() {
@@ -91,6 +93,7 @@ function ReferenceList() {
         order="server"
         page={reference.data}
         status={reference}
+        scroll={columns.length > WIDE_FROM}
         filters={
           study.counts.subjects > 0 ? (
             <>

@@ -17,6 +17,8 @@ import { TableChoice, TableSearch } from '../ui/TableFilters.tsx'
 import { useTableParams } from '../ui/useTableParams.ts'
 
 const FILTERS = ['code', 'siteId'] as const
+/** With more columns than this the table scrolls in a box of its own. */
+const WIDE_FROM = 9
 
 /** The sensor's values, session by session, as they were entered. */
 export default function SessionsPage() {
@@ -77,6 +79,7 @@ function Sessions() {
         order="server"
         page={sessions.data}
         status={sessions}
+        scroll={columns.length > WIDE_FROM}
         filters={
           study.counts.sessions > 0 ? (
             <>

@@ -81,7 +81,7 @@ function Opened({ subject }: { subject: Subject }) {
               },
               {
                 term: 'Corrected',
-                value: subject.version === 1 ? 'never' : `${subject.version - 1} times`,
+                value: timesWords(subject.version - 1),
               },
             ]}
           />
@@ -116,6 +116,8 @@ function Opened({ subject }: { subject: Subject }) {
     </Sheet>
   )
 }
+
+const timesWords = (times: number): string => ['never', 'once', 'twice'][times] ?? `${times} times`
 
 function Recorded({ subject }: { subject: Subject }) {
   const study = useStudy()

@@ -57,11 +57,11 @@ function TableCell<Data extends RowData>({
       data-label={labelled && typeof header === 'string' ? header : undefined}
       className={classes(
         CELL,
-        meta?.numeric && 'pr-6 text-right whitespace-nowrap last:pr-2.5',
+        meta?.numeric && 'text-right whitespace-nowrap tablet:pr-6 tablet:last:pr-2.5',
         meta?.mono && 'font-mono text-[14px] leading-[22.5px]',
         'max-tablet:grid max-tablet:grid-cols-[minmax(7em,2fr)_3fr] max-tablet:items-baseline max-tablet:gap-x-4 max-tablet:text-left',
         labelled
-          ? 'max-tablet:before:font-sans max-tablet:before:text-sm max-tablet:before:text-ink-2 max-tablet:before:content-[attr(data-label)]'
+          ? 'max-tablet:before:whitespace-normal max-tablet:before:font-sans max-tablet:before:text-sm max-tablet:before:text-ink-2 max-tablet:before:content-[attr(data-label)]'
           : 'max-tablet:block',
       )}
     >

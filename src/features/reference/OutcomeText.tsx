@@ -6,7 +6,7 @@ export function OutcomeText({ outcome }: { outcome: Outcome | null }) {
   return (
     <span className="inline-flex items-center gap-2 whitespace-nowrap">
       <svg viewBox="0 0 12 12" aria-hidden="true" className="size-3 flex-none overflow-visible">
-        {outcome === 'present' && <circle cx="6" cy="6" r="4.6" className="fill-present" />}
+        {outcome === 'present' && <circle cx="6" cy="6" r="5" className="fill-present" />}
         {outcome === 'absent' && (
           <path
             d="M6 .8 11.2 6 6 11.2 .8 6z"

@@ -47,7 +47,6 @@ const number: TableColumn<Session> = {
   id: 'number',
   header: 'Session',
   value: (session) => session.number,
-  numeric: true,
 }
 
 const startedAt: TableColumn<Session> = {

@@ -15,12 +15,14 @@ export function StudySection() {
           width="short"
         />
       </FieldRow>
-      <TextField
-        name="title"
-        label="Title"
-        hint="One line that says what is studied in whom."
-        width="full"
-      />
+      <div className="max-w-3xl">
+        <TextField
+          name="title"
+          label="Title"
+          hint="One line that says what is studied in whom."
+          width="full"
+        />
+      </div>
     </FormSection>
   )
 }

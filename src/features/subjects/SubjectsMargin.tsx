@@ -32,12 +32,12 @@ export function SubjectsMargin({ studyId, sites, importTo }: SubjectsMarginProps
             value: (
               <>
                 {toDo.map(({ needs, count, words }) => (
-                  <Link key={needs} to={`?needs=${needs}`} className="link block">
+                  <Link key={needs} to={`?needs=${needs}`} className="link block min-h-6">
                     {formatCount(count!)} {words}
                   </Link>
                 ))}
                 {importTo && (
-                  <Link to={importTo} className="link block">
+                  <Link to={importTo} className="link block min-h-6">
                     Bring in a file
                   </Link>
                 )}

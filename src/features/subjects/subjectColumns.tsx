@@ -5,7 +5,7 @@ import { InstantText } from '../../ui/InstantText.tsx'
 import { Tag } from '../../ui/Tag.tsx'
 import type { TableColumn } from '../../ui/tableColumn.ts'
 import { SessionGlyphs } from './SessionGlyphs.tsx'
-import { ageBandWords, sexWords } from './subjectWords.ts'
+import { ageBandWords, sexMark } from './subjectWords.ts'
 
 /** Columns of the list of subjects; `severalSites` adds where a subject belongs. */
 export function subjectColumns(kind: StudyKind, severalSites: boolean): TableColumn<Subject>[] {
@@ -34,7 +34,7 @@ export function subjectColumns(kind: StudyKind, severalSites: boolean): TableCol
       sortable: true,
     },
     { id: 'ageBand', header: 'Age band', value: (subject) => ageBandWords(subject.ageBand) },
-    { id: 'sex', header: 'Sex', value: (subject) => sexWords(subject.sex) },
+    { id: 'sex', header: 'Sex', value: (subject) => sexMark(subject.sex) },
     {
       id: 'sessions',
       header: 'Breath sessions',
@@ -57,6 +57,7 @@ export function subjectColumns(kind: StudyKind, severalSites: boolean): TableCol
     id: 'site',
     header: 'Site',
     value: (subject) => subject.siteName,
+    cell: (subject) => <span className="wide:whitespace-nowrap">{subject.siteName}</span>,
   }
   return severalSites ? columns.toSpliced(1, 0, site) : columns
 }
