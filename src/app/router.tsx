@@ -31,6 +31,10 @@ const STUDY_PAGES: RouteObject[] = [
   { path: 'review', lazy: page(() => import('../pages/ReviewPage.tsx')) },
   { path: 'reports', lazy: page(() => import('../pages/ReportsPage.tsx')) },
   { path: 'reports/new', lazy: page(() => import('../pages/NewReportPage.tsx')) },
+  { path: 'lock', lazy: page(() => import('../pages/LockPage.tsx')) },
+  { path: 'results', lazy: page(() => import('../pages/ResultsPage.tsx')) },
+  { path: 'results/explore', lazy: page(() => import('../pages/ExplorePage.tsx')) },
+  { path: 'results/:analysisId', lazy: page(() => import('../pages/AnalysisPage.tsx')) },
 ]
 
 const builtStations = new Set(STUDY_PAGES.map((route) => route.path?.split('/')[0] ?? ''))

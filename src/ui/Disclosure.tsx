@@ -1,11 +1,21 @@
 import type { ReactNode } from 'react'
 
-type DisclosureProps = { summary: ReactNode; children: ReactNode; startsOpen?: boolean }
+type DisclosureProps = {
+  summary: ReactNode
+  children: ReactNode
+  startsOpen?: boolean
+  /** Told when it opens and closes, for content that is dear to make. */
+  onToggle?: (open: boolean) => void
+}
 
 /** The browser's own details element: works by keyboard and opens for a search in the page. */
-export function Disclosure({ summary, children, startsOpen = false }: DisclosureProps) {
+export function Disclosure({ summary, children, startsOpen = false, onToggle }: DisclosureProps) {
   return (
-    <details open={startsOpen} className="group border-y border-rule py-0.5 [&+&]:border-t-0">
+    <details
+      open={startsOpen}
+      onToggle={(event) => onToggle?.(event.currentTarget.open)}
+      className="group border-y border-rule py-0.5 [&+&]:border-t-0"
+    >
       <summary className="flex min-h-10 list-none items-center gap-2.5 font-semibold text-spruce [&::-webkit-details-marker]:hidden">
         <svg
           aria-hidden="true"

@@ -1,0 +1,126 @@
+import { type ReactNode, useMemo } from 'react'
+import type { Analysis } from '#shared/schemas/analysis.ts'
+import type { DatasetPairs, DatasetValues } from '#shared/schemas/dataset.ts'
+import { EARLIER_DATA_BADGE_REASON } from '#shared/terms/analysis.ts'
+import { unitLabel } from '#shared/terms/gases.ts'
+import { CopyableHash } from '../../ui/CopyableHash.tsx'
+import { InstantText } from '../../ui/InstantText.tsx'
+import { Sheet } from '../../ui/Sheet.tsx'
+import { Skeleton } from '../../ui/Skeleton.tsx'
+import { AccuracyPanels } from './AccuracyPanels.tsx'
+import { AgreementPanels } from './AgreementPanels.tsx'
+import { levelWords } from './accuracyShown.ts'
+import { countedNotes } from './countedNotes.ts'
+import { LeftOutList } from './LeftOutList.tsx'
+import { RepeatCheck } from './RepeatCheck.tsx'
+import { StandingFacts } from './StandingFacts.tsx'
+
+type StoredAnalysisProps = {
+  analysis: Analysis
+  /** The frozen values or pairs that the figures draw; absent while they load. */
+  values: DatasetValues | undefined
+  pairs: DatasetPairs | undefined
+  provenance: readonly string[]
+  mayRepeat: boolean
+}
+
+/** A stored analysis: exactly the numbers that were stored. */
+export function StoredAnalysis(props: StoredAnalysisProps) {
+  const { analysis, values, pairs, provenance } = props
+  return (
+    <Sheet label="About this analysis" margin={<Margin {...props} />}>
+      {analysis.result.kind === 'accuracy' ? (
+        <StoredAccuracy analysis={analysis} values={values} provenance={provenance} />
+      ) : (
+        <StoredAgreement analysis={analysis} pairs={pairs} provenance={provenance} />
+      )}
+    </Sheet>
+  )
+}
+
+function StoredAccuracy(props: Pick<StoredAnalysisProps, 'analysis' | 'values' | 'provenance'>) {
+  const { result, parameters } = props.analysis
+  if (result.kind !== 'accuracy' || parameters.kind !== 'accuracy') return null
+  return (
+    <AccuracyPanels
+      shown={{
+        analyteName: result.analyteName,
+        unit: unitLabel(result.unit),
+        direction: parameters.direction,
+        confidence: parameters.confidence,
+        prevalence: parameters.prevalence,
+        plannedCutOff: result.plannedCutOff,
+        overall: result,
+        atCutOff: result.atCutOff,
+      }}
+      values={props.values}
+      provenance={props.provenance}
+    />
+  )
+}
+
+function StoredAgreement(props: Pick<StoredAnalysisProps, 'analysis' | 'pairs' | 'provenance'>) {
+  const { pairs } = props
+  const { result, parameters } = props.analysis
+  const shown = useMemo(
+    () =>
+      result.kind === 'agreement' && pairs
+        ? {
+            analyteName: result.analyteName,
+            unit: unitLabel(result.unit),
+            confidence: parameters.confidence,
+            figures: result,
+            pairs,
+          }
+        : null,
+    [result, parameters, pairs],
+  )
+  if (!shown) return <Skeleton lines={10} />
+  return <AgreementPanels shown={shown} provenance={props.provenance} />
+}
+
+function Margin({ analysis, mayRepeat }: StoredAnalysisProps) {
+  const { result, parameters } = analysis
+  const interval =
+    result.kind === 'accuracy'
+      ? result.area && `${result.area.method}, ${levelWords(parameters.confidence)}`
+      : `${result.limitsMethod}, ${levelWords(parameters.confidence)}`
+  return (
+    <>
+      <StandingFacts
+        caution={analysis.caution}
+        dataset={{ ...analysis, hash: analysis.datasetHash }}
+        counted={<Counted analysis={analysis} />}
+        {...(result.kind === 'accuracy' ? { reference: analysis.referenceStandard } : {})}
+        {...(interval ? { interval } : {})}
+        run={
+          <>
+            <InstantText at={analysis.runAt} /> by {analysis.runByName}
+            <br />
+            statistics {analysis.statisticsVersion}
+          </>
+        }
+        more={[
+          {
+            term: 'Stored result',
+            value: <CopyableHash value={analysis.resultHash} label="hash of the stored result" />,
+          },
+          { term: 'Standing', value: EARLIER_DATA_BADGE_REASON },
+        ]}
+      />
+      {mayRepeat && <RepeatCheck analysisId={analysis.id} />}
+    </>
+  )
+}
+
+function Counted({ analysis: { result, parameters } }: { analysis: Analysis }): ReactNode {
+  const { counts } = result
+  return (
+    <LeftOutList
+      subjects={counts.subjects}
+      counted={'counted' in counts ? counts.counted : counts.present + counts.absent}
+      leftOut={counts.leftOut}
+      notes={countedNotes(counts, parameters.sessionRule)}
+    />
+  )
+}
