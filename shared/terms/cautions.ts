@@ -44,3 +44,6 @@ export const CAUTIONS: Record<RegulatoryStatus, CautionWords> = {
 export const UNBLINDED_STAMP =
   'Earlier data: sensor and reference values are held together. Nobody in this study is blinded.'
 export const DEMONSTRATION_STAMP = 'Demonstration study: all data are invented.'
+
+/** Stands wherever somebody could act on a figure at a bedside. */
+export const LOCAL_PROTOCOL = 'Local protocol and licensed clinicians decide.'
