@@ -66,11 +66,7 @@ function SubjectsList({ sites, importTo }: SubjectsListProps) {
   const study = useStudy()
   const params = useTableParams({ filters: SUBJECT_FILTERS })
   const subjects = useQuery(subjectsQuery(study.id, params.request))
-  const severalSites = sites.length > 1
-  const columns = useMemo(
-    () => subjectColumns(study.kind, severalSites),
-    [study.kind, severalSites],
-  )
+  const columns = useMemo(() => subjectColumns(study.kind), [study.kind])
   return (
     <Sheet
       label="What is to do"

@@ -6,7 +6,7 @@ import { sessions } from '#db/schema/sessions.ts'
 import { sites } from '#db/schema/sites.ts'
 import { subjects } from '#db/schema/subjects.ts'
 import type { Allowed } from '#server/changes/targets.ts'
-import { codeBegins, ofSites } from '#server/features/subjects/subjects.reads.ts'
+import { codeBegins, ofSites, siteNameColumn } from '#server/features/subjects/subjects.reads.ts'
 import type { Reference, ReferenceQuery } from '#shared/schemas/reference.ts'
 
 /**
@@ -39,11 +39,11 @@ export async function listReference(read: Reader, allowed: Allowed, query: Refer
     .select({
       subjectId: subjects.id,
       subjectCode: subjects.code,
-      siteName: sites.name,
+      siteName: siteNameColumn,
       outcome: referenceOutcomes.outcome,
     })
     .from(subjects)
-    .innerJoin(sites, eq(sites.id, subjects.siteId))
+    .leftJoin(sites, eq(sites.id, subjects.siteId))
     .leftJoin(referenceOutcomes, eq(referenceOutcomes.subjectId, subjects.id))
     .where(and(filter, query.after === undefined ? undefined : gt(subjects.code, query.after)))
     .orderBy(asc(subjects.code))

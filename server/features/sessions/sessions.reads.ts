@@ -5,7 +5,7 @@ import { sessionValues } from '#db/schema/sessionValues.ts'
 import { sites } from '#db/schema/sites.ts'
 import { subjects } from '#db/schema/subjects.ts'
 import type { Allowed } from '#server/changes/targets.ts'
-import { codeBegins, ofSites } from '#server/features/subjects/subjects.reads.ts'
+import { codeBegins, ofSites, siteNameColumn } from '#server/features/subjects/subjects.reads.ts'
 import { refuseField } from '#shared/errors/AppError.ts'
 import type { SessionQuery } from '#shared/schemas/session.ts'
 
@@ -29,13 +29,13 @@ export async function listSessions(read: Reader, allowed: Allowed, query: Sessio
       id: sessions.id,
       subjectId: sessions.subjectId,
       subjectCode: subjects.code,
-      siteName: sites.name,
+      siteName: siteNameColumn,
       number: sessions.number,
       startedAt: sessions.startedAt,
     })
     .from(subjects)
     .innerJoin(sessions, eq(sessions.subjectId, subjects.id))
-    .innerJoin(sites, eq(sites.id, subjects.siteId))
+    .leftJoin(sites, eq(sites.id, subjects.siteId))
     .where(and(filter, query.after === undefined ? undefined : beyond(query.after)))
     .orderBy(asc(subjects.code), asc(sessions.number))
     .limit(limit + 1)

@@ -24,11 +24,17 @@ import type { Allowed } from '#server/changes/targets.ts'
 import { AppError } from '#shared/errors/AppError.ts'
 import type { SubjectQuery } from '#shared/schemas/subject.ts'
 
+/**
+ * Every subject has a site. Joined from the left all the same: an inner join lets the database begin
+ * with the sites and sort all subjects for one page (0.45 s instead of 5 ms at 18,000).
+ */
+export const siteNameColumn = sql<string>`${sites.name}`
+
 const columns = {
   id: subjects.id,
   code: subjects.code,
   siteId: subjects.siteId,
-  siteName: sites.name,
+  siteName: siteNameColumn,
   sex: subjects.sex,
   ageBand: subjects.ageBand,
   enrolledAt: subjects.enrolledAt,
@@ -51,7 +57,7 @@ export async function getSubject(read: Reader, subjectId: string) {
   const [row] = await read
     .select(columns)
     .from(subjects)
-    .innerJoin(sites, eq(sites.id, subjects.siteId))
+    .leftJoin(sites, eq(sites.id, subjects.siteId))
     .leftJoin(imports, eq(imports.id, subjects.importId))
     .leftJoin(referenceOutcomes, eq(referenceOutcomes.subjectId, subjects.id))
     .where(eq(subjects.id, subjectId))
@@ -81,7 +87,7 @@ export async function listSubjects(read: Reader, allowed: Allowed, query: Subjec
   const rows = await read
     .select(columns)
     .from(subjects)
-    .innerJoin(sites, eq(sites.id, subjects.siteId))
+    .leftJoin(sites, eq(sites.id, subjects.siteId))
     .leftJoin(imports, eq(imports.id, subjects.importId))
     .leftJoin(referenceOutcomes, eq(referenceOutcomes.subjectId, subjects.id))
     .where(and(filter, query.after ? beyond(order, query.after, backwards) : undefined))

@@ -46,7 +46,7 @@ export function SubjectsMargin({ studyId, sites, importTo }: SubjectsMarginProps
             ),
           },
           ...sites.map((site) => ({
-            term: site.name,
+            term: `${site.name}, ${site.prefix}`,
             value: `${formatCount(site.subjectCount)}${
               site.plannedSubjects === null ? '' : ` of ${formatCount(site.plannedSubjects)}`
             }`,

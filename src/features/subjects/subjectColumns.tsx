@@ -7,9 +7,9 @@ import type { TableColumn } from '../../ui/tableColumn.ts'
 import { SessionGlyphs } from './SessionGlyphs.tsx'
 import { ageBandWords, sexMark } from './subjectWords.ts'
 
-/** Columns of the list of subjects; `severalSites` adds where a subject belongs. */
-export function subjectColumns(kind: StudyKind, severalSites: boolean): TableColumn<Subject>[] {
-  const columns: TableColumn<Subject>[] = [
+/** Columns of the list of subjects; a code's prefix says its site. */
+export function subjectColumns(kind: StudyKind): TableColumn<Subject>[] {
+  return [
     {
       id: 'code',
       header: 'Subject',
@@ -50,16 +50,13 @@ export function subjectColumns(kind: StudyKind, severalSites: boolean): TableCol
       id: 'next',
       header: 'Next',
       value: () => null,
-      cell: (subject) => <Next subject={subject} />,
+      cell: (subject) => (
+        <span className="tablet:whitespace-nowrap">
+          <Next subject={subject} />
+        </span>
+      ),
     },
   ]
-  const site: TableColumn<Subject> = {
-    id: 'site',
-    header: 'Site',
-    value: (subject) => subject.siteName,
-    cell: (subject) => <span className="wide:whitespace-nowrap">{subject.siteName}</span>,
-  }
-  return severalSites ? columns.toSpliced(1, 0, site) : columns
 }
 
 function Next({ subject: { sessionCount, outcomeDecided } }: { subject: Subject }) {
