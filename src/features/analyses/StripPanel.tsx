@@ -2,11 +2,11 @@ import { useCallback, useId } from 'react'
 import { OutcomeStrip } from '#shared/figures/OutcomeStrip.tsx'
 import { outcomeStripTable } from '#shared/figures/outcomeStripTable.ts'
 import type { ValueAxis } from '#shared/figures/valueAxis.ts'
+import { useFigureTheme } from '../../ui/useFigureTheme.ts'
+import { useMeasuredWidth } from '../../ui/useMeasuredWidth.ts'
 import type { AccuracyShown } from './accuracyShown.ts'
 import { cutOffLabel } from './cutOffChoices.ts'
 import { FigureNumbers } from './FigureNumbers.tsx'
-import { useFigureTheme } from './useFigureTheme.ts'
-import { useMeasuredWidth } from './useMeasuredWidth.ts'
 
 type StripPanelProps = {
   shown: AccuracyShown
