@@ -56,17 +56,17 @@ export async function readCsvRows(
         if (failed) return
         try {
           const broken = errors.find((error) => error.type === 'Quotes')
-          data.forEach((cells, index) => {
-            if (broken && index === Math.min(broken.row ?? 0, data.length - 1))
-              refuseFile(
-                `Line ${line}: quotation marks are not closed, or stand in the middle of a cell.`,
-              )
-            take(cells)
-          })
+          // Rows before the broken one are read, so that its line is known.
+          for (const cells of broken ? data.slice(0, broken.row) : data) take(cells)
+          if (broken)
+            refuseFile(
+              `Line ${line}: quotation marks are not closed, or stand in the middle of a cell.`,
+            )
         } catch (error) {
           failed = true
-          parser.abort()
+          // Aborting calls complete(), so the refusal has to come first.
           fail(error)
+          parser.abort()
         }
       },
       complete: () => resolve(),
