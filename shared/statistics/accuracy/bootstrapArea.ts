@@ -1,6 +1,6 @@
 import type { Interval, LevelOption } from '../Interval.ts'
+import { countResampler } from '../random/countResampler.ts'
 import { percentileInterval } from '../random/percentileInterval.ts'
-import { pointOfEach } from '../random/pointOfEach.ts'
 import type { Resampling } from '../random/Resampling.ts'
 import { randomStream } from '../random/randomStream.ts'
 import { requireCount } from '../requireCount.ts'
@@ -28,34 +28,25 @@ export function bootstrapArea(
   requireCount(replicates, 'The number of replicates', 2)
   requireProbability(level, 'The confidence level')
   const random = randomStream(seed)
-  const points = curve.truePositives.length
-  const pointOfPresent = pointOfEach(curve.truePositives)
-  const pointOfAbsent = pointOfEach(curve.falsePositives)
-  const present = new Int32Array(points)
-  const absent = new Int32Array(points)
+  const drawPresent = countResampler(curve.truePositives, random)
+  const drawAbsent = countResampler(curve.falsePositives, random)
   const areas = new Float64Array(replicates)
   for (let r = 0; r < replicates; r++) {
-    draw(present, pointOfPresent, random)
-    draw(absent, pointOfAbsent, random)
-    areas[r] = areaFromCounts(present, absent, curve.nPresent, curve.nAbsent)
+    areas[r] = areaAlong(drawPresent(), drawAbsent())
     if (r % 100 === 99) onProgress?.((r + 1) / replicates)
   }
   const method = 'bootstrap, stratified, percentile' as const
   return { ...percentileInterval(areas, level), replicates, seed, method }
 }
 
-function draw(counts: Int32Array, pointOf: Int32Array, random: () => number): void {
-  counts.fill(0)
-  const n = pointOf.length
-  for (let i = 0; i < n; i++) counts[pointOf[Math.floor(random() * n)]!]!++
-}
-
-function areaFromCounts(present: Int32Array, absent: Int32Array, m: number, n: number): number {
-  let absentAbove = 0
+/** Area from counts along a curve, in whole numbers up to the last division. */
+function areaAlong(present: Int32Array, absent: Int32Array): number {
+  const last = present.length - 1
+  const m = present[last]!
+  const n = absent[last]!
   let twiceWins = 0
-  for (let k = 1; k < present.length; k++) {
-    twiceWins += present[k]! * (2 * (n - absentAbove) - absent[k]!)
-    absentAbove += absent[k]!
+  for (let k = 1; k <= last; k++) {
+    twiceWins += (present[k]! - present[k - 1]!) * (2 * n - absent[k]! - absent[k - 1]!)
   }
   return twiceWins / (2 * m * n)
 }

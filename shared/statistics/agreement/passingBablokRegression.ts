@@ -33,13 +33,13 @@ export type SlopeRanks = {
   at: (ranks: number[]) => number[]
 }
 
-/** Up to here all slopes are simply listed and sorted (two million of them). */
-const LISTED_UP_TO = 2000
+/** Up to here all slopes are simply listed and sorted (half a million of them). */
+const LISTED_UP_TO = 1000
 
 /**
  * Passing–Bablok regression of y on x: the median of all slopes between points, shifted so that x and y
  * are treated alike, with the bounds' ranks C = z·√(n(n−1)(2n+5)/18), M1 = round((N − C)/2); intercept
- * the median of y − slope·x. Slopes within 1e-9 of −1 count as −1. Beyond 2,000 points ranks are found
+ * the median of y − slope·x. Slopes within 1e-9 of −1 count as −1. Beyond 1,000 points ranks are found
  * by counting inversions, O(n log n) in time and O(n) in memory.
  * @param x, y n ≥ 3 finite values, at least two of them different
  * @throws StatisticsError 'too-few', 'unequal-length', 'non-finite', 'constant'

@@ -1,5 +1,5 @@
 import type { RocCurve } from '../accuracy/rocCurve.ts'
-import { pointOfEach } from '../random/pointOfEach.ts'
+import { countResampler } from '../random/countResampler.ts'
 import type { Resampling } from '../random/Resampling.ts'
 import { randomStream } from '../random/randomStream.ts'
 import { requireCount } from '../requireCount.ts'
@@ -33,18 +33,12 @@ export function optimismOfCutOff(
 ): CutOffOptimism {
   requireCount(replicates, 'The number of replicates', 1)
   const random = randomStream(seed)
-  const sample: RocCurve = {
-    ...curve,
-    truePositives: new Int32Array(curve.truePositives.length),
-    falsePositives: new Int32Array(curve.falsePositives.length),
-  }
-  const pointOfPresent = pointOfEach(curve.truePositives)
-  const pointOfAbsent = pointOfEach(curve.falsePositives)
+  const drawPresent = countResampler(curve.truePositives, random)
+  const drawAbsent = countResampler(curve.falsePositives, random)
   let gainSensitivity = 0
   let gainSpecificity = 0
   for (let r = 0; r < replicates; r++) {
-    resample(sample.truePositives, pointOfPresent, random)
-    resample(sample.falsePositives, pointOfAbsent, random)
+    const sample = { ...curve, truePositives: drawPresent(), falsePositives: drawAbsent() }
     const k = chosenPoint(sample, rule)
     gainSensitivity += (sample.truePositives[k]! - curve.truePositives[k]!) / curve.nPresent
     gainSpecificity += (curve.falsePositives[k]! - sample.falsePositives[k]!) / curve.nAbsent
@@ -60,14 +54,6 @@ export function optimismOfCutOff(
     specificity: inUnit(apparent.specificity - optimism.specificity),
   }
   return { rule, apparent, optimism, corrected, replicates, seed, method: 'bootstrap, stratified' }
-}
-
-/** Fills `cumulative` with the counts of a sample drawn with replacement. */
-function resample(cumulative: Int32Array, pointOf: Int32Array, random: () => number): void {
-  cumulative.fill(0)
-  const n = pointOf.length
-  for (let i = 0; i < n; i++) cumulative[pointOf[Math.floor(random() * n)]!]!++
-  for (let k = 1; k < cumulative.length; k++) cumulative[k]! += cumulative[k - 1]!
 }
 
 function inUnit(value: number): number {
