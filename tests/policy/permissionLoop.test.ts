@@ -135,6 +135,15 @@ describe('every route × role and duty × own or other site × open or locked ×
       expect([route.path, await ask(route, keys, line.person)]).toEqual([route.path, 404])
   })
 
+  test('a line opens nothing once the identity provider no longer vouches for its role', async () => {
+    const study = await api.given.study()
+    const keys = await oneOfEach(api.fixtures, api.given, study, study.id)
+    const person = await api.given.person({ roles: ['analyst'] })
+    await api.given.member(study, { role: 'coordinator', duty: 'studyLead', person })
+    for (const route of studyRoutes)
+      expect([route.path, await ask(route, keys, person)]).toEqual([route.path, 404])
+  })
+
   test('routes outside any study hang on the role that the identity provider vouches for', async () => {
     for (const role of Object.keys(DUTIES_OF_ROLE) as Role[]) {
       const who = await api.given.person({ roles: [role] })
