@@ -54,11 +54,11 @@ function Stored({ analysis }: { analysis: Analysis }) {
         sub={analysisSub(analysis)}
         back={{ to: `/studies/${study.id}/results`, label: 'Results' }}
         actions={
-          may(study, 'report.issue') && (
+          may(study, 'report.issue') ? (
             <ButtonLink to={`/studies/${study.id}/reports`} kind="quiet">
               Go to the reports
             </ButtonLink>
-          )
+          ) : undefined
         }
       />
       {failed && <ErrorNotice what="The figures could not be drawn" error={failed} />}

@@ -46,6 +46,9 @@ export default function LockPage() {
   const open = locks.find((lock) => lock.state === 'requested') ?? null
   const approved = locks.find((lock) => lock.state === 'approved') ?? null
   const leaveSigning = () => setSearch({}, { replace: true })
+  const resultsLink = may(study, 'analysis.list') ? (
+    <ButtonLink to={`/studies/${study.id}/results`}>Go to the results</ButtonLink>
+  ) : undefined
   const signing = open !== null && search.get(SIGN_PARAMETER) === open.id
   return (
     <>
@@ -55,9 +58,7 @@ export default function LockPage() {
           lockedAt === null ? (
             <LockActions open={open} checklist={checklist} readerId={me.data?.person.id} />
           ) : (
-            may(study, 'analysis.list') && (
-              <ButtonLink to={`/studies/${study.id}/results`}>Go to the results</ButtonLink>
-            )
+            resultsLink
           )
         }
       />

@@ -25,15 +25,14 @@ export default function ResultsPage() {
         title="Results"
         sub="On locked data only. Only what is stored goes into reports."
         actions={
-          datasets.data &&
-          datasets.data.length > 0 && (
+          datasets.data && datasets.data.length > 0 ? (
             <>
               <ButtonLink to="explore?kind=agreement" kind="quiet">
                 Explore agreement
               </ButtonLink>
               <ButtonLink to="explore?kind=accuracy">Explore accuracy</ButtonLink>
             </>
-          )
+          ) : undefined
         }
       />
       {!open ? (

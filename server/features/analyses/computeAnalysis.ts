@@ -10,6 +10,7 @@ import { accuracyValues } from '#shared/analyses/accuracyValues.ts'
 import { agreementFiguresOf } from '#shared/analyses/agreementFiguresOf.ts'
 import { agreementPairs } from '#shared/analyses/agreementPairs.ts'
 import { plannedCutOff } from '#shared/analyses/asProtocol.ts'
+import { refusalSentence } from '#shared/analyses/refusalSentence.ts'
 import { AppError } from '#shared/errors/AppError.ts'
 import type {
   AccuracyParameters,
@@ -20,7 +21,7 @@ import type {
   AnalysisResult,
 } from '#shared/schemas/analysis.ts'
 import type { DatasetRow } from '#shared/schemas/dataset.ts'
-import { StatisticsError, type StatisticsErrorCode } from '#shared/statistics/StatisticsError.ts'
+import { StatisticsError } from '#shared/statistics/StatisticsError.ts'
 
 type Of<P> = { dataset: DatasetRecord; rows: readonly DatasetRow[]; parameters: P }
 
@@ -42,10 +43,7 @@ export async function computeAnalysis(
       : agreementResult({ dataset, rows, parameters })
   } catch (error) {
     if (!(error instanceof StatisticsError)) throw error
-    const advice = ADVICE[error.code]
-    throw new AppError('statistics-refused', {
-      message: advice ? `${error.message} ${advice}` : error.message,
-    })
+    throw new AppError('statistics-refused', { message: refusalSentence(error) })
   }
 }
 
@@ -77,11 +75,4 @@ function agreementResult({ dataset, rows, parameters }: Of<AgreementParameters>)
 function measured({ manifest }: DatasetRecord, analyteKey: string) {
   const { name, unit } = frozenAnalyte(manifest, analyteKey, 'parameters.analyteKey')
   return { analyteName: name, unit }
-}
-
-/** What somebody can do about a refusal. */
-const ADVICE: Partial<Record<StatisticsErrorCode, string>> = {
-  'one-class':
-    'Choose another analyte, or look at Reference whether the outcomes were coded as meant.',
-  'too-few': 'Choose another analyte, or see in the counts which values are missing.',
 }

@@ -1,6 +1,6 @@
 import { createHash } from 'node:crypto'
 import { setImmediate as letOthersRun } from 'node:timers/promises'
-import { asc, eq, getTableName } from 'drizzle-orm'
+import { and, asc, eq, getTableName, gt } from 'drizzle-orm'
 import type { Reader } from '#db/client.ts'
 import { analytes } from '#db/schema/analytes.ts'
 import { protocolVersions } from '#db/schema/protocolVersions.ts'
@@ -15,49 +15,6 @@ import { canonicalJson } from '#server/changes/hash.ts'
 /** So many records are worked on at a stretch before other requests get their turn. */
 export const AT_A_STRETCH = 1_000
 
-/** Every table that holds a study's data, with all records of the study in order of key. */
-export async function readStudyTables(read: Reader, studyId: string) {
-  return {
-    sites: await read.select().from(sites).where(eq(sites.studyId, studyId)).orderBy(asc(sites.id)),
-    analytes: await read
-      .select()
-      .from(analytes)
-      .where(eq(analytes.studyId, studyId))
-      .orderBy(asc(analytes.id)),
-    protocolVersions: await read
-      .select()
-      .from(protocolVersions)
-      .where(eq(protocolVersions.studyId, studyId))
-      .orderBy(asc(protocolVersions.id)),
-    subjects: await read
-      .select()
-      .from(subjects)
-      .where(eq(subjects.studyId, studyId))
-      .orderBy(asc(subjects.id)),
-    sessions: await read
-      .select()
-      .from(sessions)
-      .where(eq(sessions.studyId, studyId))
-      .orderBy(asc(sessions.id)),
-    sessionValues: await read
-      .select()
-      .from(sessionValues)
-      .where(eq(sessionValues.studyId, studyId))
-      .orderBy(asc(sessionValues.id)),
-    referenceMeasurements: await read
-      .select()
-      .from(referenceMeasurements)
-      .where(eq(referenceMeasurements.studyId, studyId))
-      .orderBy(asc(referenceMeasurements.id)),
-    referenceOutcomes: await read
-      .select()
-      .from(referenceOutcomes)
-      .where(eq(referenceOutcomes.studyId, studyId))
-      .orderBy(asc(referenceOutcomes.id)),
-  }
-}
-export type StudyTables = Awaited<ReturnType<typeof readStudyTables>>
-
 const TABLES = {
   sites,
   analytes,
@@ -67,7 +24,32 @@ const TABLES = {
   sessionValues,
   referenceMeasurements,
   referenceOutcomes,
-} as const satisfies Record<keyof StudyTables, unknown>
+} as const
+type StudyTable = (typeof TABLES)[keyof typeof TABLES]
+export type StudyTables = { [K in keyof typeof TABLES]: (typeof TABLES)[K]['$inferSelect'][] }
+
+/** Every table that holds a study's data, with all records of the study in order of key. */
+export async function readStudyTables(read: Reader, studyId: string): Promise<StudyTables> {
+  const found: Partial<Record<keyof StudyTables, unknown[]>> = {}
+  for (const [key, table] of Object.entries(TABLES) as [keyof StudyTables, StudyTable][])
+    found[key] = await recordsOf(read, table, studyId)
+  return found as StudyTables
+}
+
+/** Piece by piece: thousands of records parsed at once would hold other requests up. */
+async function recordsOf(read: Reader, table: StudyTable, studyId: string) {
+  const records: { id: string }[] = []
+  for (let last = ''; ; last = records.at(-1)!.id) {
+    const piece = await read
+      .select()
+      .from(table)
+      .where(and(eq(table.studyId, studyId), gt(table.id, last)))
+      .orderBy(asc(table.id))
+      .limit(AT_A_STRETCH)
+    for (const record of piece) records.push(record)
+    if (piece.length < AT_A_STRETCH) return records
+  }
+}
 
 /** For the manifest: each table's name, number of records and hash over their canonical forms. */
 export async function hashStudyTables(tables: StudyTables) {

@@ -1,6 +1,7 @@
 import { type ReactNode, useMemo, useState } from 'react'
 import { accuracyAtCutOffOf } from '#shared/analyses/accuracyAtCutOffOf.ts'
 import { accuracyOverallOf } from '#shared/analyses/accuracyOverallOf.ts'
+import { refusalSentence } from '#shared/analyses/refusalSentence.ts'
 import type { AccuracyOverall, AccuracyParameters } from '#shared/schemas/analysis.ts'
 import type { Dataset, DatasetValues } from '#shared/schemas/dataset.ts'
 import { StatisticsError } from '#shared/statistics/StatisticsError.ts'
@@ -128,7 +129,7 @@ function attempt(values: DatasetValues, direction: ExplorerSettings['direction']
   try {
     return { figures: accuracyOverallOf(values, { direction, confidence: CONFIDENCE }) }
   } catch (error) {
-    if (error instanceof StatisticsError) return { figures: null, problem: error.message }
+    if (error instanceof StatisticsError) return { figures: null, problem: refusalSentence(error) }
     throw error
   }
 }

@@ -1,5 +1,6 @@
 import { type ReactNode, useMemo, useState } from 'react'
 import { agreementFiguresOf } from '#shared/analyses/agreementFiguresOf.ts'
+import { refusalSentence } from '#shared/analyses/refusalSentence.ts'
 import type { AgreementFigures, AgreementParameters } from '#shared/schemas/analysis.ts'
 import type { Dataset, DatasetPairs } from '#shared/schemas/dataset.ts'
 import { StatisticsError } from '#shared/statistics/StatisticsError.ts'
@@ -59,7 +60,6 @@ export function AgreementExplorer(props: AgreementExplorerProps) {
       <div className="flex flex-wrap gap-x-6 gap-y-3">
         <NumberBox
           label="Acceptable from"
-          unit={unit}
           value={lower}
           onChange={setLower}
           refuse={(value) =>
@@ -129,7 +129,7 @@ function attempt(pairs: DatasetPairs, at: Parameters<typeof agreementFiguresOf>[
   try {
     return { figures: agreementFiguresOf(pairs, at) }
   } catch (error) {
-    if (error instanceof StatisticsError) return { figures: null, problem: error.message }
+    if (error instanceof StatisticsError) return { figures: null, problem: refusalSentence(error) }
     throw error
   }
 }

@@ -3,6 +3,7 @@ import { columnHeading, type FigureTable, formatCell } from '#shared/figures/fig
 import { formatCount } from '#shared/terms/numbers.ts'
 import { Disclosure } from '../../ui/Disclosure.tsx'
 import { LinkButton } from '../../ui/LinkButton.tsx'
+import { ScrollBox } from '../../ui/ScrollBox.tsx'
 import { StaticTable } from '../../ui/StaticTable.tsx'
 import { figureCsv } from './figureCsv.ts'
 
@@ -48,7 +49,7 @@ function Numbers({ table: make, provenance, fileName }: FigureNumbersProps) {
           `The first ${formatCount(rows.length)} of ${formatCount(table.rows.length)} rows. `}
         <LinkButton onClick={save}>Save all rows as a CSV file</LinkButton>
       </p>
-      <div className="max-h-96 overflow-auto">
+      <ScrollBox label={`${table.caption}, all rows shown`} className="max-h-96 overflow-auto">
         <StaticTable
           caption={table.caption}
           columns={table.columns.map((column) => ({
@@ -60,7 +61,7 @@ function Numbers({ table: make, provenance, fileName }: FigureNumbersProps) {
             cells: table.columns.map((column) => formatCell(column, row[column.key] ?? null)),
           }))}
         />
-      </div>
+      </ScrollBox>
     </>
   )
 }

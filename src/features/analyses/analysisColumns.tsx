@@ -36,6 +36,7 @@ export const analysisColumns: TableColumn<AnalysisSummary>[] = [
     id: 'headline',
     header: 'Figure',
     value: headlineWords,
+    cell: (analysis) => <span className="wide:whitespace-nowrap">{headlineWords(analysis)}</span>,
   },
   {
     id: 'badge',

@@ -16,7 +16,7 @@ const COUNTED = [{ header: 'Check' }, { header: 'Standing' }, { header: 'Left', 
 const COLUMNS = [...COUNTED, { header: 'Where' }]
 /** Both tables share their columns, so that the eye goes straight down. */
 const SAME_COLUMNS =
-  'wide:[&_table]:table-fixed wide:[&_th:nth-child(1)]:w-[44%] wide:[&_th:nth-child(2)]:w-[28%] wide:[&_th:nth-child(3)]:w-[9%]'
+  'tablet:[&_table]:table-fixed tablet:[&_th:nth-child(1)]:w-[44%] tablet:[&_th:nth-child(2)]:w-[28%] tablet:[&_th:nth-child(3)]:w-[9%]'
 
 /** What has to be settled before the lock, and what is worth knowing before it is signed. */
 export function LockChecklist({ studyId, checks, past = false }: LockChecklistProps) {
