@@ -1,8 +1,8 @@
 import fc from 'fast-check'
 import { describe, expect, test } from 'vitest'
 import { valueAxis } from '#shared/figures/valueAxis.ts'
-import { figureCsv } from '../../src/features/analyses/figureCsv.ts'
 import { readableCutOff } from '../../src/features/analyses/readableCutOff.ts'
+import { figureCsv } from '../../src/ui/figureCsv.ts'
 
 describe('the cut-off slider', () => {
   test('gives values that a person can write down', () => {

@@ -5,10 +5,10 @@ import type { DifferencePlotData } from '#shared/figures/differencePlotTypes.ts'
 import { ScatterIdentity } from '#shared/figures/ScatterIdentity.tsx'
 import { scatterIdentityTable } from '#shared/figures/scatterIdentityTable.ts'
 import { formatEstimate, formatInterval } from '#shared/terms/numbers.ts'
+import { FigureNumbers } from '../../ui/FigureNumbers.tsx'
 import { useFigureTheme } from '../../ui/useFigureTheme.ts'
 import { useMeasuredWidth } from '../../ui/useMeasuredWidth.ts'
 import { type AgreementShown, agreementDecimals } from './agreementShown.ts'
-import { FigureNumbers } from './FigureNumbers.tsx'
 import { LimitsTable } from './LimitsTable.tsx'
 
 type AgreementPanelsProps = {

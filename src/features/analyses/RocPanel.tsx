@@ -3,11 +3,11 @@ import { RocCurve } from '#shared/figures/RocCurve.tsx'
 import { rocCurveTable } from '#shared/figures/rocCurveTable.ts'
 import type { RocCurveSeries, RocCutOff } from '#shared/figures/rocCurveTypes.ts'
 import { formatEstimate, formatInterval } from '#shared/terms/numbers.ts'
+import { FigureNumbers } from '../../ui/FigureNumbers.tsx'
 import { useFigureTheme } from '../../ui/useFigureTheme.ts'
 import { useMeasuredWidth } from '../../ui/useMeasuredWidth.ts'
 import type { AccuracyShown } from './accuracyShown.ts'
 import { cutOffLabel } from './cutOffChoices.ts'
-import { FigureNumbers } from './FigureNumbers.tsx'
 
 type RocPanelProps = { shown: AccuracyShown; provenance: readonly string[] }
 

@@ -2,11 +2,11 @@ import { useCallback, useId } from 'react'
 import { OutcomeStrip } from '#shared/figures/OutcomeStrip.tsx'
 import { outcomeStripTable } from '#shared/figures/outcomeStripTable.ts'
 import type { ValueAxis } from '#shared/figures/valueAxis.ts'
+import { FigureNumbers } from '../../ui/FigureNumbers.tsx'
 import { useFigureTheme } from '../../ui/useFigureTheme.ts'
 import { useMeasuredWidth } from '../../ui/useMeasuredWidth.ts'
 import type { AccuracyShown } from './accuracyShown.ts'
 import { cutOffLabel } from './cutOffChoices.ts'
-import { FigureNumbers } from './FigureNumbers.tsx'
 
 type StripPanelProps = {
   shown: AccuracyShown

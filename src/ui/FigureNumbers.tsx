@@ -1,11 +1,11 @@
 import { memo, useMemo, useState } from 'react'
 import { columnHeading, type FigureTable, formatCell } from '#shared/figures/figureTable.ts'
 import { formatCount } from '#shared/terms/numbers.ts'
-import { Disclosure } from '../../ui/Disclosure.tsx'
-import { LinkButton } from '../../ui/LinkButton.tsx'
-import { ScrollBox } from '../../ui/ScrollBox.tsx'
-import { StaticTable } from '../../ui/StaticTable.tsx'
+import { Disclosure } from './Disclosure.tsx'
 import { figureCsv } from './figureCsv.ts'
+import { LinkButton } from './LinkButton.tsx'
+import { ScrollBox } from './ScrollBox.tsx'
+import { StaticTable } from './StaticTable.tsx'
 
 type FigureNumbersProps = {
   summary: string
