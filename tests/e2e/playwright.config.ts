@@ -15,6 +15,7 @@ export default defineConfig({
   reporter: [['list']],
   use: {
     viewport: { width: 1440, height: 900 },
+    actionTimeout: 20_000,
     locale: 'en-GB',
     timezoneId: 'Europe/London',
     screenshot: 'only-on-failure',
