@@ -6,7 +6,7 @@ import { requireProbability } from '../requireProbability.ts'
 import { StatisticsError } from '../StatisticsError.ts'
 
 export type IntraclassCorrelation = {
-  /** Null where the mean square between subjects, by which means of k divide, is 0. */
+  /** Null where the variances that it divides by come to 0. */
   estimate: number | null
   /** Null where the F ratio has no bound (no error left at all). */
   lower: number | null
@@ -47,11 +47,11 @@ export function intraclassCorrelations(
   const twoWay = { df1: n - 1, df2: (n - 1) * (k - 1) }
   const f1 = ratioTest(msb, msw, oneWay, tail)
   const f3 = ratioTest(msb, mse, twoWay, tail)
-  const single2 = (msb - mse) / (msb + (k - 1) * mse + (k * (msj - mse)) / n)
+  const single2 = ratio(msb - mse, msb + (k - 1) * mse + (k * (msj - mse)) / n)
   const interval2 = agreementInterval(squares, single2, tail)
-  const ofMean = (r: number | null) => (r === null ? null : (k * r) / (1 + (k - 1) * r))
-  const single = (f: number | null) => (f === null ? null : (f - 1) / (f + k - 1))
-  const mean = (f: number | null) => (f === null || f === 0 ? null : 1 - 1 / f)
+  const ofMean = (r: number | null) => (r === null ? null : ratio(k * r, 1 + (k - 1) * r))
+  const single = (f: number | null) => (f === null ? null : ratio(f - 1, f + k - 1))
+  const mean = (f: number | null) => (f === null ? null : ratio(f - 1, f))
   const build = (
     estimate: number | null,
     test: ReturnType<typeof ratioTest>,
@@ -59,18 +59,24 @@ export function intraclassCorrelations(
     upper: number | null,
   ) => ({ estimate, lower, upper, f: test.f, df1: test.df1, df2: test.df2, p: test.p })
   return {
-    single1: build((msb - msw) / (msb + (k - 1) * msw), f1, single(f1.low), single(f1.high)),
+    single1: build(ratio(msb - msw, msb + (k - 1) * msw), f1, single(f1.low), single(f1.high)),
     single2: build(single2, f3, interval2.lower, interval2.upper),
-    single3: build((msb - mse) / (msb + (k - 1) * mse), f3, single(f3.low), single(f3.high)),
-    mean1: build(msb === 0 ? null : (msb - msw) / msb, f1, mean(f1.low), mean(f1.high)),
+    single3: build(ratio(msb - mse, msb + (k - 1) * mse), f3, single(f3.low), single(f3.high)),
+    mean1: build(ratio(msb - msw, msb), f1, mean(f1.low), mean(f1.high)),
     mean2: build(
-      msb === 0 ? null : (msb - mse) / (msb + (msj - mse) / n),
+      ratio(msb - mse, msb + (msj - mse) / n),
       f3,
       ofMean(interval2.lower),
       ofMean(interval2.upper),
     ),
-    mean3: build(msb === 0 ? null : (msb - mse) / msb, f3, mean(f3.low), mean(f3.high)),
+    mean3: build(ratio(msb - mse, msb), f3, mean(f3.low), mean(f3.high)),
   }
+}
+
+/** Null where the denominator is 0, or so small that rounding made it. */
+function ratio(numerator: number, denominator: number): number | null {
+  const value = numerator / denominator
+  return Math.abs(value) < 1e12 ? value : null
 }
 
 type MeanSquares = {
@@ -132,18 +138,19 @@ function ratioTest(above: number, below: number, df: { df1: number; df2: number 
 }
 
 /** McGraw & Wong's interval for absolute agreement, with Satterthwaite degrees of freedom. */
-function agreementInterval(squares: MeanSquares, icc: number, tail: number) {
+function agreementInterval(squares: MeanSquares, icc: number | null, tail: number) {
   const { n, k, msb, msj, mse } = squares
-  if (mse === 0) return { lower: null, upper: null }
+  if (icc === null || mse === 0) return { lower: null, upper: null }
   const a = k * icc * (msj / mse)
   const b = n * (1 + (k - 1) * icc) - k * icc
   const v = ((k - 1) * (n - 1) * (a + b) ** 2) / ((n - 1) * a * a + b * b)
-  if (!(v > 0) || !Number.isFinite(v)) return { lower: null, upper: null }
+  // with hardly a degree of freedom the F quantile is beyond all bounds
+  if (!(v > 0.01) || !Number.isFinite(v)) return { lower: null, upper: null }
   const spread = k * msj + (k * n - k - n) * mse
   const low = fQuantile(tail, n - 1, v)
   const high = fQuantile(tail, v, n - 1)
   return {
-    lower: (n * (msb - low * mse)) / (low * spread + n * msb),
-    upper: (n * (high * msb - mse)) / (spread + n * high * msb),
+    lower: ratio(n * (msb - low * mse), low * spread + n * msb),
+    upper: ratio(n * (high * msb - mse), spread + n * high * msb),
   }
 }

@@ -1,3 +1,4 @@
+import { requireFinite } from '../requireFinite.ts'
 import { StatisticsError } from '../StatisticsError.ts'
 
 /** Values of each subject, each with at least one value. */
@@ -64,11 +65,9 @@ function groupMoments(values: ArrayLike<number>) {
   if (values.length === 0) {
     throw new StatisticsError('too-few', 'Each subject needs at least one value.')
   }
+  requireFinite(values, 'The replicates')
   let sum = 0
   for (let i = 0; i < values.length; i++) sum += values[i]!
-  if (!Number.isFinite(sum)) {
-    throw new StatisticsError('non-finite', 'A value is not a finite number.')
-  }
   const mean = sum / values.length
   let squares = 0
   for (let i = 0; i < values.length; i++) squares += (values[i]! - mean) ** 2

@@ -24,6 +24,8 @@ export function regularisedBeta(
     stirlingError(n) - stirlingError(a) - stirlingError(b) - deviance(a, n * x) - deviance(b, n * y)
   const front = Math.exp(logBinomial) * Math.sqrt((a * b) / (2 * Math.PI * n))
   const density = front / (x * y)
+  // so far out that the smaller tail is below the smallest number
+  if (front === 0) return { lower: x < a / n ? 0 : 1, upper: x < a / n ? 1 : 0, density }
   if (x < (a + 1) / (n + 2)) {
     const lower = (front * fraction(x, a, b)) / a
     return { lower, upper: 1 - lower, density }

@@ -18,6 +18,8 @@ export function regularisedGamma(
   // x^a e^−x / Γ(a), written as a Poisson term to keep its digits when a is large
   const front = Math.exp(-stirlingError(a) - deviance(a, x)) * Math.sqrt(a / (2 * Math.PI))
   const density = front / x
+  // so far out that the smaller tail is below the smallest number
+  if (front === 0) return { lower: x < a ? 0 : 1, upper: x < a ? 1 : 0, density }
   if (x < a + 1) {
     let term = 1 / a
     let sum = term

@@ -10,9 +10,12 @@ export type LogisticTerm = {
   standardError: number
   z: number
   p: number
-  /** exp(estimate) with its Wald interval. */
-  oddsRatio: number
-  oddsRatioInterval: Interval
+  /**
+   * exp(estimate) for one unit of the predictor, with its Wald interval; null where the unit is so large
+   * beside the predictor's spread that they leave the range of numbers: express it in a smaller unit.
+   */
+  oddsRatio: number | null
+  oddsRatioInterval: Interval | null
 }
 
 export type LogisticRegression = {
@@ -52,12 +55,20 @@ export function logisticRegression(
     const estimate = coefficients[k]!
     const standardError = Math.sqrt(covariance[k]![k]!)
     const z = estimate / standardError
-    const oddsRatioInterval = {
-      lower: Math.exp(estimate - z95 * standardError),
-      upper: Math.exp(estimate + z95 * standardError),
-    }
+    const upper = Math.exp(estimate + z95 * standardError)
+    const representable = Number.isFinite(upper)
     const p = normalTwoSided(z)
-    return { term, estimate, standardError, z, p, oddsRatio: Math.exp(estimate), oddsRatioInterval }
+    return {
+      term,
+      estimate,
+      standardError,
+      z,
+      p,
+      oddsRatio: representable ? Math.exp(estimate) : null,
+      oddsRatioInterval: representable
+        ? { lower: Math.exp(estimate - z95 * standardError), upper }
+        : null,
+    }
   })
   const share = nPresent / n
   const nullLogLikelihood = nPresent * Math.log(share) + (n - nPresent) * Math.log(1 - share)

@@ -18,8 +18,8 @@ export const modelQuantities: Quantities = {
       z: term.z,
       p: term.p,
       odds_ratio: term.oddsRatio,
-      or_lower: term.oddsRatioInterval.lower,
-      or_upper: term.oddsRatioInterval.upper,
+      or_lower: term.oddsRatioInterval?.lower ?? null,
+      or_upper: term.oddsRatioInterval?.upper ?? null,
     })),
   logistic_covariance: (s) => modelOf(s).covariance,
   logistic_fit: (s) => {
