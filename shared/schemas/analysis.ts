@@ -173,9 +173,16 @@ export const analysisSummary = z.object({
   runByName: z.string(),
   datasetId: id,
   datasetHash: z.string(),
-  /** The area under the curve, or the bias, with its interval; null where the area is withheld. */
+  /** The one figure that it is listed by, with its interval; null where counts alone are given. */
   headline: z
-    .object({ estimate: z.number(), lower: bound, upper: bound, unit: z.string().nullable() })
+    .object({
+      label: z.string(),
+      estimate: z.number(),
+      lower: bound,
+      upper: bound,
+      unit: z.string().nullable(),
+      decimals: count,
+    })
     .nullable(),
   caution,
 })

@@ -1,4 +1,5 @@
 import type { Measure } from './analysis.ts'
+import { unitLabel } from './gases.ts'
 import { formatEstimate, formatFraction, formatInterval, NOT_ESTIMABLE } from './numbers.ts'
 
 /** How results are written: one wording for the screen and the printed page. */
@@ -45,9 +46,12 @@ function intervalText({ estimate, lower, upper }: MeasureFigures, decimals: numb
 /** A number with its unit; alone where it has none. */
 export const withUnit = (text: string, unit: string): string => (unit ? `${text} ${unit}` : text)
 
+/** "95 %" from the confidence level 0.95. */
+export const levelWords = (confidence: number): string =>
+  `${Number((confidence * 100).toFixed(2))} %`
+
 /** "95 % interval" from the confidence level 0.95. */
-export const intervalHeading = (confidence: number): string =>
-  `${Number((confidence * 100).toFixed(2))} % interval`
+export const intervalHeading = (confidence: number): string => `${levelWords(confidence)} interval`
 
 /**
  * Bias, limits and their bounds carry the same decimals, so that they can be compared by eye: as many
@@ -66,3 +70,21 @@ export const lineTexts = (
   estimate: formatEstimate(line.estimate, decimals),
   interval: formatInterval(line.lower, line.upper, decimals),
 })
+
+type Headline = {
+  label: string
+  estimate: number
+  lower: number | null
+  upper: number | null
+  unit: string | null
+  decimals: number
+}
+
+/** "Area 0.731" and "0.630 to 0.833"; without a headline the counts are all there is. */
+export function headlineTexts(headline: Headline | null): { figure: string; interval: string } {
+  if (!headline) return { figure: 'Counts only', interval: '' }
+  const { label, unit, decimals } = headline
+  const { estimate, interval } = lineTexts(headline, decimals)
+  const measured = withUnit(estimate, unit === null ? '' : unitLabel(unit))
+  return { figure: `${label} ${measured}`, interval }
+}

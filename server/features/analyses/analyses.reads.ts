@@ -26,6 +26,7 @@ const summary = {
   protocol: protocolVersions.document,
   area: picked<Line>('$.area'),
   bias: picked<Line>('$.bias'),
+  sd: picked<number>('$.sd'),
   unit: picked<string>('$.unit'),
 }
 

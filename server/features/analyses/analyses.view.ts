@@ -1,16 +1,15 @@
 import { asProtocol } from '#shared/analyses/asProtocol.ts'
+import { headlineOf } from '#shared/analyses/headlineOf.ts'
 import { type Analysis, type AnalysisSummary, analysisResult } from '#shared/schemas/analysis.ts'
 import { CAUTIONS } from '#shared/terms/cautions.ts'
 import type { AnalysisRow, AnalysisSummaryRow } from './analyses.reads.ts'
 
 export function toAnalysisSummary(row: AnalysisSummaryRow): AnalysisSummary {
-  const line = row.kind === 'accuracy' ? row.area : row.bias
-  const unit = row.kind === 'agreement' ? row.unit : null
   return {
     ...row,
     runAt: row.runAt.toISOString(),
     runByName: row.runByName ?? '',
-    headline: line && { ...line, unit },
+    headline: headlineOf(row.kind, row),
     caution: CAUTIONS[row.protocol.regulatoryStatus],
   }
 }

@@ -4,11 +4,11 @@ import { differencePairsTable } from '#shared/figures/differencePlotTable.ts'
 import type { DifferencePlotData } from '#shared/figures/differencePlotTypes.ts'
 import { ScatterIdentity } from '#shared/figures/ScatterIdentity.tsx'
 import { scatterIdentityTable } from '#shared/figures/scatterIdentityTable.ts'
-import { formatEstimate, formatInterval } from '#shared/terms/numbers.ts'
+import { agreementDecimals, lineTexts, withUnit } from '#shared/terms/resultText.ts'
 import { FigureNumbers } from '../../ui/FigureNumbers.tsx'
 import { useFigureTheme } from '../../ui/useFigureTheme.ts'
 import { useMeasuredWidth } from '../../ui/useMeasuredWidth.ts'
-import { type AgreementShown, agreementDecimals } from './agreementShown.ts'
+import type { AgreementShown } from './agreementShown.ts'
 import { LimitsTable } from './LimitsTable.tsx'
 
 type AgreementPanelsProps = {
@@ -22,15 +22,13 @@ type AgreementPanelsProps = {
 export function AgreementPanels({ shown, provenance, children }: AgreementPanelsProps) {
   const id = useId()
   const { bias, sd } = shown.figures
-  const decimals = agreementDecimals(sd)
+  const { estimate, interval } = lineTexts(bias, agreementDecimals(sd))
   return (
     <>
       <section aria-labelledby={`${id}-bias`} className="min-w-0">
         <h2 id={`${id}-bias`}>
-          Bias {formatEstimate(bias.estimate, decimals)} {shown.unit}{' '}
-          <span className="font-normal text-ink-2">
-            ({formatInterval(bias.lower, bias.upper, decimals)})
-          </span>
+          Bias {withUnit(estimate, shown.unit)}{' '}
+          <span className="font-normal text-ink-2">({interval})</span>
         </h2>
         <Differences shown={shown} provenance={provenance} />
       </section>

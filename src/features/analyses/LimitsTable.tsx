@@ -1,10 +1,9 @@
 import type { AgreementFigures } from '#shared/schemas/analysis.ts'
 import { ACCEPTANCE_VERDICT_WORDS, type AcceptanceVerdict } from '#shared/terms/analysis.ts'
 import { formatConcentration, formatEstimate } from '#shared/terms/numbers.ts'
+import { agreementDecimals, intervalHeading, lineTexts } from '#shared/terms/resultText.ts'
 import { Notice, type NoticeTone } from '../../ui/Notice.tsx'
 import { StaticTable } from '../../ui/StaticTable.tsx'
-import { levelWords } from './accuracyShown.ts'
-import { agreementDecimals, lineWords } from './agreementShown.ts'
 
 const TONES: Record<AcceptanceVerdict, NoticeTone> = {
   within: 'good',
@@ -17,10 +16,11 @@ type LimitsTableProps = { figures: AgreementFigures; unit: string; confidence: n
 /** Bias and limits with their intervals, and how they stand to the acceptance limits. */
 export function LimitsTable({ figures, unit, confidence }: LimitsTableProps) {
   const { bias, lowerLimit, upperLimit, sd, acceptance, caveats } = figures
-  const row = (name: string, line: typeof bias) => ({
-    key: name,
-    cells: [name, ...lineWords(line, sd)],
-  })
+  const decimals = agreementDecimals(sd)
+  const row = (name: string, line: typeof bias) => {
+    const { estimate, interval } = lineTexts(line, decimals)
+    return { key: name, cells: [name, estimate, interval] }
+  }
   return (
     <>
       <StaticTable
@@ -28,7 +28,7 @@ export function LimitsTable({ figures, unit, confidence }: LimitsTableProps) {
         columns={[
           { header: `Sensor − reference${unit ? ` (${unit})` : ''}` },
           { header: 'Estimate', numeric: true },
-          { header: `${levelWords(confidence)} interval`, numeric: true },
+          { header: intervalHeading(confidence), numeric: true },
         ]}
         rows={[
           row('Upper limit', upperLimit),
@@ -36,7 +36,7 @@ export function LimitsTable({ figures, unit, confidence }: LimitsTableProps) {
           row('Lower limit', lowerLimit),
           {
             key: 'sd',
-            cells: ['SD of the differences', formatEstimate(sd, agreementDecimals(sd)), ''],
+            cells: ['SD of the differences', formatEstimate(sd, decimals), ''],
           },
         ]}
       />

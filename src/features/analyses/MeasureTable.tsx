@@ -1,26 +1,14 @@
 import type { AccuracyAtCutOffResult, MeasureRow } from '#shared/schemas/analysis.ts'
 import { type Measure, measureLabel } from '#shared/terms/analysis.ts'
-import {
-  formatCount,
-  formatEstimate,
-  formatFraction,
-  formatInterval,
-  NOT_ESTIMABLE,
-} from '#shared/terms/numbers.ts'
+import { formatCount } from '#shared/terms/numbers.ts'
+import { intervalHeading, measureTexts } from '#shared/terms/resultText.ts'
 import { StaticTable } from '../../ui/StaticTable.tsx'
-import { levelWords } from './accuracyShown.ts'
 
 type MeasureTableProps = {
   atCutOff: AccuracyAtCutOffResult
   confidence: number
   prevalence: number | null
 }
-
-const RATIOS: readonly Measure[] = [
-  'likelihoodRatioPositive',
-  'likelihoodRatioNegative',
-  'diagnosticOddsRatio',
-]
 
 /** The two-by-two table at a cut-off, and what it tells with its intervals. */
 export function MeasureTable({ atCutOff, confidence, prevalence }: MeasureTableProps) {
@@ -45,19 +33,13 @@ export function MeasureTable({ atCutOff, confidence, prevalence }: MeasureTableP
           { header: 'Measure' },
           { header: 'n/N', numeric: true },
           { header: 'Estimate', numeric: true },
-          { header: `${levelWords(confidence)} interval`, numeric: true },
+          { header: intervalHeading(confidence), numeric: true },
         ]}
-        rows={measures.map((each) => ({
-          key: each.measure,
-          cells: [
-            <MeasureName key="name" row={each} prevalence={prevalence} />,
-            each.numerator === null || each.denominator === null
-              ? ''
-              : formatFraction(each.numerator, each.denominator),
-            formatEstimate(each.estimate, decimalsOf(each.measure)),
-            intervalText(each),
-          ],
-        }))}
+        rows={measures.map((each) => {
+          const { fraction, estimate, interval } = measureTexts(each)
+          const name = <MeasureName key="name" row={each} prevalence={prevalence} />
+          return { key: each.measure, cells: [name, fraction, estimate, interval] }
+        })}
       />
       <div className="mt-3 space-y-2 text-sm text-ink-2">
         {caveat && <p className="text-ink">{caveat}</p>}
@@ -80,14 +62,6 @@ function MeasureName({ row, prevalence }: { row: MeasureRow; prevalence: number 
       {row.note && <span className="block text-sm text-ink-2">{row.note}</span>}
     </>
   )
-}
-
-const decimalsOf = (measure: Measure) => (RATIOS.includes(measure) ? 2 : 3)
-
-function intervalText({ measure, estimate, lower, upper }: MeasureRow): string {
-  if (estimate === null) return NOT_ESTIMABLE
-  if (lower === null || upper === null) return 'none'
-  return formatInterval(lower, upper, decimalsOf(measure))
 }
 
 /** "Wilson for proportions; log method (Simel) for likelihood ratios; …". */

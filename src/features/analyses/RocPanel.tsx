@@ -1,4 +1,5 @@
 import { useCallback, useId, useMemo } from 'react'
+import { cutOffLabel } from '#shared/analyses/cutOffLabel.ts'
 import { RocCurve } from '#shared/figures/RocCurve.tsx'
 import { rocCurveTable } from '#shared/figures/rocCurveTable.ts'
 import type { RocCurveSeries, RocCutOff } from '#shared/figures/rocCurveTypes.ts'
@@ -7,7 +8,6 @@ import { FigureNumbers } from '../../ui/FigureNumbers.tsx'
 import { useFigureTheme } from '../../ui/useFigureTheme.ts'
 import { useMeasuredWidth } from '../../ui/useMeasuredWidth.ts'
 import type { AccuracyShown } from './accuracyShown.ts'
-import { cutOffLabel } from './cutOffChoices.ts'
 
 type RocPanelProps = { shown: AccuracyShown; provenance: readonly string[] }
 

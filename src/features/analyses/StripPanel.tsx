@@ -1,4 +1,5 @@
 import { useCallback, useId } from 'react'
+import { cutOffLabel } from '#shared/analyses/cutOffLabel.ts'
 import { OutcomeStrip } from '#shared/figures/OutcomeStrip.tsx'
 import { outcomeStripTable } from '#shared/figures/outcomeStripTable.ts'
 import type { ValueAxis } from '#shared/figures/valueAxis.ts'
@@ -6,7 +7,6 @@ import { FigureNumbers } from '../../ui/FigureNumbers.tsx'
 import { useFigureTheme } from '../../ui/useFigureTheme.ts'
 import { useMeasuredWidth } from '../../ui/useMeasuredWidth.ts'
 import type { AccuracyShown } from './accuracyShown.ts'
-import { cutOffLabel } from './cutOffChoices.ts'
 
 type StripPanelProps = {
   shown: AccuracyShown

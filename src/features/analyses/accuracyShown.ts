@@ -13,7 +13,3 @@ export type AccuracyShown = {
   overall: AccuracyOverall
   atCutOff: AccuracyAtCutOffResult | null
 }
-
-/** "95 %". */
-export const levelWords = (confidence: number): string =>
-  `${Number((confidence * 100).toFixed(2))} %`

@@ -1,8 +1,7 @@
 import { Link } from 'react-router-dom'
 import type { AnalysisSummary } from '#shared/schemas/analysis.ts'
 import { ANALYSIS_BADGE_LABELS, ANALYSIS_KIND_LABELS } from '#shared/terms/analysis.ts'
-import { unitLabel } from '#shared/terms/gases.ts'
-import { formatConcentration, formatEstimate, formatInterval } from '#shared/terms/numbers.ts'
+import { headlineTexts } from '#shared/terms/resultText.ts'
 import { InstantText } from '../../ui/InstantText.tsx'
 import { Tag } from '../../ui/Tag.tsx'
 import type { TableColumn } from '../../ui/tableColumn.ts'
@@ -57,14 +56,8 @@ export const analysisColumns: TableColumn<AnalysisSummary>[] = [
   },
 ]
 
-/** "Area 0.731 (0.630 to 0.833)", "Bias −2.12 ppb (−22 to 17.8)". */
-export function headlineWords({ kind, headline }: AnalysisSummary): string {
-  if (kind === 'accuracy') {
-    if (!headline) return 'Counts only'
-    return `Area ${formatEstimate(headline.estimate)} (${formatInterval(headline.lower, headline.upper)})`
-  }
-  if (!headline) return ''
-  const { estimate, lower, upper, unit } = headline
-  const bounds = [lower, upper].map((bound) => formatConcentration(bound ?? Number.NaN, 3))
-  return `Bias ${formatConcentration(estimate, 3)} ${unitLabel(unit ?? '1')} (${bounds.join(' to ')})`
+/** "Area 0.731 (0.630 to 0.833)". */
+export function headlineWords({ headline }: Pick<AnalysisSummary, 'headline'>): string {
+  const { figure, interval } = headlineTexts(headline)
+  return interval ? `${figure} (${interval})` : figure
 }

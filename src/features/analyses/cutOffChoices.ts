@@ -19,14 +19,3 @@ export function cutOffChoices(rules: AccuracyOverall['rules']): CutOffChoice[] {
     }),
   )
 }
-
-/** What the mark on the figures is called. */
-export function cutOffLabel(
-  cutOff: number,
-  planned: number | null,
-  rules: AccuracyOverall['rules'],
-): string {
-  if (cutOff === planned) return 'planned cut-off'
-  const choice = cutOffChoices(rules).find((each) => each.cutOff === cutOff)
-  return choice ? `${CUT_OFF_RULE_LABELS[choice.rule]}, exploratory` : 'cut-off, exploratory'
-}

@@ -1,10 +1,9 @@
 import type { ReportBlock, ReportDocument, ReportSection } from '#server/reports/reportDocument.ts'
+import { headlineOf } from '#shared/analyses/headlineOf.ts'
 import type { AnalysisResult } from '#shared/schemas/analysis.ts'
 import { METHODS } from '#shared/statistics/METHODS.ts'
 import { ANALYSIS_BADGE_LABELS, ANALYSIS_KIND_LABELS } from '#shared/terms/analysis.ts'
-import { unitLabel } from '#shared/terms/gases.ts'
-import { formatEstimate, formatInterval } from '#shared/terms/numbers.ts'
-import { agreementDecimals, lineTexts, withUnit } from '#shared/terms/resultText.ts'
+import { headlineTexts } from '#shared/terms/resultText.ts'
 import type { ReportSource, StoredAnalysis } from '../reportSource.ts'
 import { accuracyBlocks } from './accuracyBlocks.tsx'
 import { agreementBlocks } from './agreementBlocks.tsx'
@@ -52,22 +51,18 @@ function summarySection(source: ReportSource): ReportSection {
         rows: source.analyses.map((analysis) => [
           `${analysis.number}. ${analysis.title}\n${ANALYSIS_KIND_LABELS[analysis.kind]}, ${ANALYSIS_BADGE_LABELS[analysis.badge].toLowerCase()}`,
           countedInWords(analysis.result),
-          headlineOf(analysis.result),
+          headlineText(analysis.result),
         ]),
       },
     ],
   }
 }
 
-function headlineOf(result: AnalysisResult): string {
-  if (result.kind === 'agreement') {
-    const { estimate, interval } = lineTexts(result.bias, agreementDecimals(result.sd))
-    return `Bias ${withUnit(estimate, unitLabel(result.unit))}\n(${interval})`
-  }
-  const { area } = result
-  return area
-    ? `Area ${formatEstimate(area.estimate)}\n(${formatInterval(area.lower, area.upper)})`
-    : 'No area is given'
+const NO_PARTS = { area: null, bias: null, sd: null, unit: null }
+
+function headlineText(result: AnalysisResult): string {
+  const { figure, interval } = headlineTexts(headlineOf(result.kind, { ...NO_PARTS, ...result }))
+  return interval ? `${figure}\n(${interval})` : figure
 }
 
 function analysisSection(
