@@ -13,6 +13,8 @@ import { SIGNED_IN_PATH } from './signIn.ts'
 const PLAIN_PAGES: RouteObject[] = [
   { index: true, lazy: page(() => import('../pages/StudiesPage.tsx')) },
   { path: 'studies/new', lazy: page(() => import('../pages/NewStudyPage.tsx')) },
+  { path: 'planning', lazy: page(() => import('../pages/PlanningPage.tsx')) },
+  { path: 'planning/:part', lazy: page(() => import('../pages/PlanningPage.tsx')) },
 ]
 
 /** Pages of a study; the first part of the path names its station. */

@@ -2,7 +2,7 @@
 export const PLANNING_METHODS = {
   hanleyMcNeil: { name: 'Hanley & McNeil', source: 'Hanley & McNeil 1982, Radiology 143:29' },
   binormal: {
-    name: 'binormal variance (Obuchowski)',
+    name: 'Binormal variance (Obuchowski)',
     source: 'Obuchowski 2004, Acad Radiol 11:1178',
   },
   twoAreas: {
@@ -11,11 +11,11 @@ export const PLANNING_METHODS = {
   },
   buderer: { name: 'Buderer', source: 'Buderer 1996, Acad Emerg Med 3:895' },
   exactFloor: {
-    name: 'exact binomial power',
+    name: 'Exact binomial power',
     source:
       'Flahault, Cadilhac & Thomas 2005, J Clin Epidemiol 58:859; Chu & Cole 2007, ibid. 60:1201',
   },
-  coPrimary: { name: 'co-primary measures', source: 'Offen et al 2007, Drug Inf J 41:19' },
+  coPrimary: { name: 'Co-primary measures', source: 'Offen et al 2007, Drug Inf J 41:19' },
   wilson: { name: 'Wilson interval', source: 'Wilson 1927, J Am Stat Assoc 22:209' },
   clopperPearson: {
     name: 'Clopper–Pearson interval',
@@ -40,11 +40,11 @@ export const PLANNING_METHODS = {
       'McNemar 1947, Psychometrika 12:153; Fagerland, Lydersen & Laake 2013, BMC Med Res Methodol 13:91',
   },
   measurementError: {
-    name: 'normal values with normal error',
+    name: 'Normal values with normal error',
     source: 'Coffin & Sukhatme 1997, Biometrics 53:823; Reiser 2000, Stat Med 19:2115',
   },
   correctedArea: {
-    name: 'correction on the probit scale',
+    name: 'Correction on the probit scale',
     source: 'Faraggi 2000, Stat Med 19:61; Reiser 2000, Stat Med 19:2115',
   },
   spearmanBrown: {
@@ -52,7 +52,7 @@ export const PLANNING_METHODS = {
     source: 'Spearman 1910, Br J Psychol 3:271; Brown 1910, ibid. 3:296',
   },
   belowDetection: {
-    name: 'numerical integration over normal values',
+    name: 'Numerical integration over normal values',
     source:
       'Perkins, Schisterman & Vexler 2007, Am J Epidemiol 165:325; Mumford et al 2006, Biostatistics 7:585',
   },
