@@ -19,6 +19,15 @@ const ROLE_WORDS: Record<Role, string> = {
   analyst: 'Analyst',
 }
 
+/** The roles, unless the name that the hospital gives says them already. */
+function rolesBeside(name: string, roles: readonly Role[]): string {
+  const words = roles.map((role) => ROLE_WORDS[role])
+  return words
+    .filter((word) => !name.toLowerCase().includes(word.toLowerCase()))
+    .map((word) => `, ${word}`)
+    .join('')
+}
+
 /** Top of every page: whose product, which study, whether all is saved, who is at work. */
 export function Band({ study, roles }: BandProps) {
   const me = useQuery(meQuery)
@@ -48,7 +57,7 @@ export function Band({ study, roles }: BandProps) {
         {me.data && (
           <span>
             {me.data.person.name}
-            {roles.length > 0 && `, ${roles.map((role) => ROLE_WORDS[role]).join(' and ')}`}
+            {rolesBeside(me.data.person.name, roles)}
           </span>
         )}
         <button

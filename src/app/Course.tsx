@@ -10,8 +10,6 @@ export type Station = {
   /** The station's live count, in words: "214 of 240". */
   count: string
   to: string
-  /** Nothing to see there yet. */
-  disabled?: boolean
 }
 
 type CourseProps = {
@@ -108,9 +106,6 @@ function StationLink({ station, current }: { station: Station; current: boolean 
       </span>
     </>
   )
-  if (station.disabled) {
-    return <span className="block py-0.5 text-ink-2">{inside}</span>
-  }
   return (
     <Link
       to={station.to}

@@ -16,7 +16,7 @@ import { Stamps } from './Stamps.tsx'
 import { COURSE_ENDS_AT, stationOf, stationsOf } from './stations.ts'
 
 /** Around every page of one study: band, course, stamps. */
-export function StudyFrame({ built }: { built: ReadonlySet<string> }) {
+export function StudyFrame() {
   const { studyId = '' } = useParams()
   const { pathname } = useLocation()
   const study = useQuery(studyQuery(studyId))
@@ -49,7 +49,7 @@ export function StudyFrame({ built }: { built: ReadonlySet<string> }) {
       }
       course={
         <Course
-          stations={stationsOf(study.data, built)}
+          stations={stationsOf(study.data)}
           current={stationOf(part)}
           endsAt={COURSE_ENDS_AT}
         />

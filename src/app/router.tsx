@@ -39,12 +39,11 @@ const STUDY_PAGES: RouteObject[] = [
   { path: 'results/:analysisId', lazy: page(() => import('../pages/AnalysisPage.tsx')) },
 ]
 
-const builtStations = new Set(STUDY_PAGES.map((route) => route.path?.split('/')[0] ?? ''))
-const firstPage = STUDY_PAGES.find((route) => route.path && !route.path.includes(':'))?.path
-
 const routes: RouteObject[] = [
   {
     element: <Root />,
+    // The router waits for the first page's code; the frame shows the shape of what comes.
+    hydrateFallbackElement: <main className="p-7" />,
     errorElement: (
       <main className="p-7">
         <PageError />
@@ -66,14 +65,12 @@ const routes: RouteObject[] = [
           },
           {
             path: 'studies/:studyId',
-            element: <StudyFrame built={builtStations} />,
+            element: <StudyFrame />,
             children: [
               {
                 errorElement: <PageError />,
                 children: [
-                  ...(firstPage
-                    ? [{ index: true, element: <Navigate to={firstPage} replace /> }]
-                    : []),
+                  { index: true, element: <Navigate to="protocol" replace /> },
                   ...STUDY_PAGES,
                   { path: '*', element: <NotFound /> },
                 ],

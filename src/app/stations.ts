@@ -59,14 +59,12 @@ const PLAN: readonly StationPlan[] = [
 
 export const COURSE_ENDS_AT = 'lock'
 
-/** @param built the stations whose pages stand */
-export function stationsOf(study: Study, built: ReadonlySet<string>): Station[] {
+export function stationsOf(study: Study): Station[] {
   return PLAN.map(({ key, label, count }) => ({
     key,
     label,
     count: count(study),
     to: `/studies/${study.id}/${key}`,
-    disabled: !built.has(key),
   }))
 }
 
