@@ -104,7 +104,7 @@ describe('slopes selected by counting', () => {
 
 describe('the parts it is made of', () => {
   const numbers = fc.array(
-    fc.oneof(fc.integer({ min: -5, max: 5 }), fc.double({ noNaN: true, noDefaultInfinity: true })),
+    fc.oneof(fc.integer({ min: -5, max: 5 }), fc.double({ min: -9e59, max: 9e59, noNaN: true })),
     {
       maxLength: 60,
     },
@@ -135,6 +135,9 @@ describe('the parts it is made of', () => {
       const expected = values.map((_, i) => i).sort((a, b) => values[a]! - values[b]! || a - b)
       expect(order).toEqual(expected)
     })
+    const many = Float64Array.from({ length: 3000 }, (_, i) => Math.round(1e3 * Math.sin(i)) / 10)
+    const expected = [...many.keys()].sort((a, b) => many[a]! - many[b]! || a - b)
+    expect([...sortedOrder(many, 'The values')]).toEqual(expected)
     expectRefusal(() => sortedOrder(Float64Array.of(1, Number.NaN), 'The values'), 'non-finite')
   })
 })

@@ -87,7 +87,8 @@ export const areaQuantities: Quantities = {
         second: table.numbers(markers[1]) as number[],
         present: table.outcomes() as boolean[],
       },
-      { seed: SEED },
+      // more than the library drew, so that the difference is its Monte Carlo error and hardly ours
+      { seed: SEED, replicates: 10_000 },
     )
     return { p, statistic: NOT_COMPARED }
   },
