@@ -197,7 +197,7 @@ export type ImportPreviewRequest = z.infer<typeof importPreviewRequest>
 
 /** Enter all good rows, or all but the lines named here; refused rows never enter. */
 export const importEnterRequest = z.object({
-  leaveOutLines: z.array(z.number().int().positive()).max(50_000),
+  leaveOutLines: z.array(z.number().int().positive()).max(25_000),
   reasonForChange,
   version: z.number().int(),
 })

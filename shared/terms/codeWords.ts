@@ -30,9 +30,12 @@ export const sexCoding = (words: readonly string[]): MeaningOf<'sex'> => ({
   ...sorted(words, SEX_WORDS),
 })
 
-/** Whether every word of a column is known on one of the sides. */
-export const isCodedOutcome = (words: readonly string[]): boolean =>
-  words.length > 0 && words.length <= 5 && codingProblem(outcomeCoding(words), words) === null
+/** Whether a column of few words holds some for present and some for absent; others stay open. */
+export function looksLikeOutcome(words: readonly string[]): boolean {
+  const { present, absent } = outcomeCoding(words)
+  return words.length <= MOST_OUTCOME_WORDS && present.length > 0 && absent.length > 0
+}
+const MOST_OUTCOME_WORDS = 8
 
 function sorted<C extends Coding>(words: readonly string[], coding: C) {
   const sides = Object.keys(coding) as (keyof C & string)[]
@@ -55,10 +58,4 @@ export function sidesOf(meaning: ColumnMeaning): [side: string, words: readonly 
     return Object.entries({ F, M, other, unknown })
   }
   return []
-}
-
-/** The first of the words that stands on no side, or null. */
-function codingProblem(meaning: ColumnMeaning, words: readonly string[]): string | null {
-  const known = new Set(sidesOf(meaning).flatMap(([, each]) => each.map(plainWord)))
-  return words.find((word) => !known.has(plainWord(word))) ?? null
 }

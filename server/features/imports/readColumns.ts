@@ -21,7 +21,7 @@ export const columnsOf = (head: CsvHead) =>
 export function readColumns(
   head: CsvHead,
   delimiter: Delimiter,
-  study: StudyTerms & { sites: StudySites },
+  study: Omit<StudyTerms, 'sites'> & { sites: StudySites },
 ): ImportReading {
   const looked = columnsOf(head).map((column, index) => {
     const values = cellsOf(head, index)

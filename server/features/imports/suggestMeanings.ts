@@ -1,5 +1,5 @@
 import type { ColumnMeaning, MeaningOf, OPEN_AGES, Suspicion } from '#shared/schemas/import.ts'
-import { isCodedOutcome, outcomeCoding, sexCoding } from '#shared/terms/codeWords.ts'
+import { looksLikeOutcome, outcomeCoding, sexCoding } from '#shared/terms/codeWords.ts'
 
 export type LookedAt = {
   name: string
@@ -12,12 +12,13 @@ export type LookedAt = {
 
 export type StudyTerms = {
   analytes: readonly { key: string; name: string; formula: string | null }[]
+  sites: readonly { name: string; prefix: string }[]
   targetCondition: string
 }
 
 const SUBJECT = /^(subject|participant|subj|person|id|code)( (id|no|nr|number|code))?$/
 const SESSION = /^(session|visit|replicate|repeat|occasion)( (no|nr|number))?$/
-const SITE = /^(site|centre|center|hospital|clinic)( (name|code|id))?$/
+const SITE = /^(site|centre|center|hospital|clinic|ward)( (name|code|id))?$/
 const SEX = /^(sex|gender)$/
 const AGE = /^age( (y|yr|yrs|year|years))?$/
 const AGE_BAND = /^age (band|group|range)$/
@@ -65,7 +66,7 @@ function meaningOf(column: LookedAt, study: StudyTerms): ColumnMeaning {
   const heading = plain(column.name)
   if (SUBJECT.test(heading)) return { as: 'subject' }
   if (SESSION.test(heading)) return { as: 'sessionNumber' }
-  if (SITE.test(heading)) return { as: 'site' }
+  if (SITE.test(heading) || namesSites(column, study)) return { as: 'site' }
   if (SEX.test(heading)) return sexCoding(column.words ?? [])
   if (AGE_BAND.test(heading)) return { as: 'ageBand' }
   if (AGE.test(heading)) return { as: 'ageYears', andOver: openAge(column.values) }
@@ -79,7 +80,7 @@ function meaningOf(column: LookedAt, study: StudyTerms): ColumnMeaning {
 function outcomeColumn(columns: readonly LookedAt[], condition: string): LookedAt | undefined {
   const target = new Set(plain(condition).split(' '))
   const score = (column: LookedAt) => {
-    if (column.suspicion || !isCodedOutcome(column.words ?? [])) return 0
+    if (column.suspicion || !looksLikeOutcome(column.words ?? [])) return 0
     const heading = plain(column.name)
     if (BELOW_LOD.test(heading)) return 0
     const named = heading.split(' ').filter((word) => word.length > 2 && target.has(word)).length
@@ -90,6 +91,12 @@ function outcomeColumn(columns: readonly LookedAt[], condition: string): LookedA
 }
 
 const outcomeOf = (column: LookedAt): ColumnMeaning => outcomeCoding(column.words ?? [])
+
+/** Every word of the column is a site's name or prefix. */
+function namesSites({ words }: LookedAt, { sites }: StudyTerms): boolean {
+  const names = new Set(sites.flatMap(({ name, prefix }) => [plain(name), plain(prefix)]))
+  return words !== null && words.length > 0 && words.every((word) => names.has(plain(word)))
+}
 
 /** The analyte that a heading names by key, by name, or by formula beside a unit of breath. */
 function analyteOf(heading: string, analytes: StudyTerms['analytes']): string | null {

@@ -31,9 +31,13 @@ const TITLED = /\b(mr|mrs|ms|miss|dr|prof)\.? +\p{Lu}/iu
 const COMMA_NAME = /^\p{Lu}[\p{L}'-]+, ?\p{Lu}[\p{L}'-]*\.?$/u
 const TWO_NAMES = /^\p{Lu}[\p{Ll}'-]+( \p{Lu}\.?)? \p{Lu}[\p{L}'-]+$/u
 
+/** Patterns look at the beginning alone: what is longer is free text anyway, and time stays bounded. */
+const LOOKED_AT = 120
+
 /** Why a single value must not be kept as text; null where it looks harmless. */
-export function suspicionOfValue(value: string): Suspicion | null {
-  if (EMAIL.test(value)) return 'contact'
+export function suspicionOfValue(text: string): Suspicion | null {
+  const value = text.slice(0, LOOKED_AT)
+  if (value.includes('@') && EMAIL.test(value)) return 'contact'
   if (PHONE.test(value) && digitsIn(value) >= 9 && /[\s()/+-]/.test(value)) return 'contact'
   if (DATE.test(value)) return 'dateOfBirth'
   if (RECORD_NUMBER.test(value)) return 'recordNumber'

@@ -5,6 +5,7 @@ import {
   type DataImport,
   DELIMITERS,
   type Delimiter,
+  type ImportMapping,
   type ImportReading,
   importMapping,
 } from '#shared/schemas/import.ts'
@@ -52,7 +53,9 @@ export function MappingForm(props: MappingFormProps) {
       busyLabel="Handing over…"
       guard={false}
       locked={props.locked}
-      onSubmit={({ mapping }) => preview.mutateAsync({ mapping, version: of.version })}
+      onSubmit={({ mapping }) =>
+        preview.mutateAsync({ mapping: oneWayToSites(mapping), version: of.version })
+      }
       onSaved={() => {
         draft.clear()
         props.onChecking()
@@ -89,17 +92,13 @@ export function MappingForm(props: MappingFormProps) {
         <CompactField name="mapping.columns" label="Columns">
           {(control) => (
             <div id={control.id} tabIndex={-1}>
-              <div
-                aria-hidden="true"
-                className={classes(
-                  MAPPING_GRID,
-                  'border-b border-rule-2 py-[7px] text-sm font-semibold text-ink-2 max-wide:hidden',
-                )}
-              >
-                <span>Heading</span>
-                <span>Some values</span>
-                <span>Means</span>
-                <span>And needs</span>
+              <div aria-hidden="true" className="border-b border-rule-2 py-[7px] max-wide:hidden">
+                <div className={classes(MAPPING_GRID, 'text-sm font-semibold text-ink-2')}>
+                  <span>Heading</span>
+                  <span>Some values</span>
+                  <span>Means</span>
+                  <span>And needs</span>
+                </div>
               </div>
               <ul>
                 {reading.columns.map((column, index) => (
@@ -117,6 +116,12 @@ export function MappingForm(props: MappingFormProps) {
     </Form>
   )
 }
+
+/** Either a column names the sites or all rows belong to one; what was said for the other way stays behind. */
+const oneWayToSites = (mapping: ImportMapping): ImportMapping =>
+  mapping.columns.some((column) => column.meaning.as === 'site')
+    ? { ...mapping, siteId: null }
+    : { ...mapping, sitesByWord: {} }
 
 /** Keeps what is being said, so that a reload loses nothing. */
 function DraftKeeper({ keep }: { keep: (draft: MappingDraft) => void }) {

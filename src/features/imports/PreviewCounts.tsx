@@ -4,11 +4,14 @@ import { formatCount } from '#shared/terms/numbers.ts'
 import { OUTCOME_LABELS, type Outcome } from '#shared/terms/outcome.ts'
 import { StaticTable } from '../../ui/StaticTable.tsx'
 
+/** So many refused rows stand on one page below; only more of them need summing up. */
+const MOST_SEEN_AT_ONCE = 20
+
 /** What the check found, in sentences, and why rows are refused. */
 export function PreviewCounts({ counts }: { counts: ImportCounts }) {
   return (
     <div className="flex flex-col gap-4">
-      <ul className="flex flex-col gap-1">
+      <ul className="grid grid-cols-[max-content_1fr] gap-x-3 gap-y-1">
         <Line figure={counts.new} strong>
           {counts.new === 1 ? 'row' : 'rows'} can be entered
           {counts.new > 0 && `, of ${subjectWords(counts.subjects)}`}
@@ -33,12 +36,12 @@ export function PreviewCounts({ counts }: { counts: ImportCounts }) {
           {counts.blanks.map(({ column, rows }, index) => (
             <span key={column}>
               {index > 0 && ' · '}
-              {column} {formatCount(rows)}
+              {column}: {formatCount(rows)}
             </span>
           ))}
         </p>
       )}
-      {counts.problems.length > 0 && (
+      {counts.refused > MOST_SEEN_AT_ONCE && (
         <StaticTable
           caption="Why rows are refused"
           hideCaption={false}
@@ -63,7 +66,7 @@ function Line({
   children: ReactNode
 }) {
   return (
-    <li className="grid grid-cols-[5.5em_1fr] gap-3">
+    <li className="contents">
       <span className={strong ? 'text-right font-bold' : 'text-right'}>{formatCount(figure)}</span>
       <span className={strong ? 'font-semibold' : undefined}>{children}</span>
     </li>

@@ -2,7 +2,7 @@ import { useState } from 'react'
 import { useController, useFormContext } from 'react-hook-form'
 import type { ImportReading } from '#shared/schemas/import.ts'
 import type { Site } from '#shared/schemas/site.ts'
-import { SelectField } from '../../forms/SelectField.tsx'
+import { FieldFrame } from '../../forms/FieldFrame.tsx'
 import { Button } from '../../ui/Button.tsx'
 import { CompactField } from './CompactField.tsx'
 import type { MappingDraft } from './mappingDefaults.ts'
@@ -15,14 +15,34 @@ export function SitePart({ reading, sites }: SitePartProps) {
   const index = watch('mapping.columns').findIndex((column) => column.meaning.as === 'site')
   if (index >= 0)
     return <SitesByWord key={index} words={reading.columns[index]?.words ?? []} sites={sites} />
+  return <OneSite sites={sites} />
+}
+
+/** Not chosen is null; the server then says that one is needed. */
+function OneSite({ sites }: { sites: readonly Site[] }) {
+  const { field } = useController({ name: 'mapping.siteId' })
   return (
-    <SelectField
+    <FieldFrame
       name="mapping.siteId"
       label="Site of all rows"
       hint="No column of the file names a site."
-      options={sites.map((site) => ({ value: site.id, label: site.name }))}
-      placeholder="Choose the site"
-    />
+    >
+      {(control) => (
+        <select
+          {...control}
+          value={field.value ?? ''}
+          onChange={(event) => field.onChange(event.target.value || null)}
+          className="control max-w-md"
+        >
+          <option value="">Choose the site</option>
+          {sites.map((site) => (
+            <option key={site.id} value={site.id}>
+              {site.name}
+            </option>
+          ))}
+        </select>
+      )}
+    </FieldFrame>
   )
 }
 
