@@ -1,5 +1,7 @@
 import { StatisticsError } from '../StatisticsError.ts'
 
+const BLOCK = 1024
+
 /**
  * Numbers in [0, 1) in steps of 2⁻³², the same ones for the same seed on every machine.
  * xoshiro128++, its state filled from the seed by SplitMix32; a whole number below k is
@@ -24,13 +26,27 @@ export function randomStream(seed: number): () => number {
     z = Math.imul(z, 0x735a2d97)
     return z ^ (z >>> 15)
   }
-  let a = mix()
-  let b = mix()
-  let c = mix()
-  let d = mix()
+  const state = Int32Array.of(mix(), mix(), mix(), mix())
+  const block = new Uint32Array(BLOCK)
+  let position = BLOCK
   return () => {
+    if (position === BLOCK) {
+      fill(block, state)
+      position = 0
+    }
+    return block[position++]! / 4294967296
+  }
+}
+
+/** The next numbers of the generator, a block at a time: its state then stays in registers. */
+function fill(block: Uint32Array, state: Int32Array): void {
+  let a = state[0]!
+  let b = state[1]!
+  let c = state[2]!
+  let d = state[3]!
+  for (let i = 0; i < block.length; i++) {
     const sum = (a + d) | 0
-    const result = (((sum << 7) | (sum >>> 25)) + a) | 0
+    block[i] = (((sum << 7) | (sum >>> 25)) + a) | 0
     const shifted = b << 9
     c ^= a
     d ^= b
@@ -38,6 +54,9 @@ export function randomStream(seed: number): () => number {
     a ^= d
     c ^= shifted
     d = (d << 11) | (d >>> 21)
-    return (result >>> 0) / 4294967296
   }
+  state[0] = a
+  state[1] = b
+  state[2] = c
+  state[3] = d
 }
