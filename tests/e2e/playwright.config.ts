@@ -9,6 +9,7 @@ export default defineConfig({
   globalSetup: '../support/stack.ts',
   // Two browsers and the product share the machine.
   workers: 2,
+  fullyParallel: true,
   retries: 0,
   timeout: 3 * MINUTE_MS,
   expect: { timeout: 10_000 },
