@@ -7,17 +7,14 @@ export function countResampler(cumulative: Int32Array, random: () => number): ()
   const n = cumulative[cumulative.length - 1]!
   // how often each subject was drawn; 16 bits keep the table small enough to stay near the processor
   const drawn = new Uint16Array(n)
+  const upTo = new Int32Array(n + 1)
   const sample = new Int32Array(cumulative.length)
   return () => {
     drawn.fill(0)
     for (let i = 0; i < n; i++) drawn[Math.floor(random() * n)]!++
-    let sum = 0
-    let subject = 0
-    for (let k = 1; k < cumulative.length; k++) {
-      const end = cumulative[k]!
-      while (subject < end) sum += drawn[subject++]!
-      sample[k] = sum
-    }
+    for (let i = 0; i < n; i++) upTo[i + 1] = upTo[i]! + drawn[i]!
+    // looked up rather than walked: which class a point belongs to is a coin toss to a branch predictor
+    for (let k = 1; k < sample.length; k++) sample[k] = upTo[cumulative[k]!]!
     return sample
   }
 }
