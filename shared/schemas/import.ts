@@ -148,6 +148,8 @@ export const dataImport = z.object({
   state: z.enum(IMPORT_STATES),
   /** Why the last piece of work ended without its result. */
   failure: z.string().nullable(),
+  /** It ended because the person who asked for it stopped it. */
+  stopped: z.boolean(),
   fileHash: z.string(),
   fileBytes: z.number().int(),
   columns: z.array(importColumn),

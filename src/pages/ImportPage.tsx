@@ -108,15 +108,7 @@ function OneImport({ of, back }: { of: DataImport; back: { to: string; label: st
         {of.state !== 'discarded' && <ImportSteps state={of.state} atColumns={atColumns} />}
         <div className="flex flex-col gap-5">
           {of.failure && (
-            <Notice
-              tone="stop"
-              title={
-                of.state === 'failed'
-                  ? 'The rows could not be checked'
-                  : 'The work did not end as asked'
-              }
-              announce
-            >
+            <Notice tone={of.stopped ? 'plain' : 'stop'} title={failureTitle(of)} announce>
               {of.failure}
             </Notice>
           )}
@@ -149,6 +141,11 @@ function OneImport({ of, back }: { of: DataImport; back: { to: string; label: st
       />
     </>
   )
+}
+
+function failureTitle({ state, stopped }: DataImport): string {
+  if (stopped) return 'Stopped'
+  return state === 'failed' ? 'The rows could not be checked' : 'The rows were not entered'
 }
 
 function subOf({ state, counts }: DataImport, atColumns: boolean): string {

@@ -220,6 +220,8 @@ describe('coming again', () => {
       sameFile: { id: first.id, number: 1, state: 'entered' },
       counts: { new: 0, same: 3, refused: 1 },
     })
+    const third = await desk.upload(FILE)
+    expect(third.body).toMatchObject({ code: 'already-exists', more: { importNumber: 2 } })
     const response = await desk.enter(again)
     expect(response.status).toBe(422)
     expect(await inStudy(study)).toEqual(before)
@@ -293,6 +295,7 @@ describe('work that ends early', () => {
     expect(await desk.get(of.id)).toMatchObject({
       state: 'previewed',
       work: null,
+      stopped: true,
       failure: 'Stopped on request. Nothing was changed.',
     })
     expect(await sizes(study)).toMatchObject({ subjects: 0, sessions: 0 })

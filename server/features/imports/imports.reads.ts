@@ -1,4 +1,4 @@
-import { and, asc, count, desc, eq, gt, inArray, lt, ne } from 'drizzle-orm'
+import { and, asc, count, desc, eq, gt, inArray, lt, ne, notInArray } from 'drizzle-orm'
 import type { Reader } from '#db/client.ts'
 import { analytes } from '#db/schema/analytes.ts'
 import { importChunks } from '#db/schema/importChunks.ts'
@@ -33,10 +33,12 @@ export async function getImport(read: Reader, importId: string) {
 export const listImports = (read: Reader, studyId: string) =>
   withJob(read).where(eq(imports.studyId, studyId)).orderBy(desc(imports.number))
 
-/** The earliest other import of the same bytes that is not discarded. */
-export async function importOfSameFile(
+type SameFile = { studyId: string; fileHash: string }
+
+/** The earliest import before this one of the same bytes that is not discarded. */
+export async function earlierImportOfSameFile(
   read: Reader,
-  { studyId, fileHash, number }: { studyId: string; fileHash: string; number?: number },
+  { studyId, fileHash, number }: SameFile & { number: number },
 ) {
   const [row] = await withJob(read)
     .where(
@@ -44,10 +46,26 @@ export async function importOfSameFile(
         eq(imports.studyId, studyId),
         eq(imports.fileHash, fileHash),
         ne(imports.state, 'discarded'),
-        number === undefined ? undefined : lt(imports.number, number),
+        lt(imports.number, number),
       ),
     )
     .orderBy(asc(imports.number))
+    .limit(1)
+  return row
+}
+
+/** An import of these bytes that is neither entered nor discarded. */
+export async function unfinishedImportOfSameFile(read: Reader, { studyId, fileHash }: SameFile) {
+  const [row] = await read
+    .select({ id: imports.id, number: imports.number })
+    .from(imports)
+    .where(
+      and(
+        eq(imports.studyId, studyId),
+        eq(imports.fileHash, fileHash),
+        notInArray(imports.state, ['entered', 'discarded']),
+      ),
+    )
     .limit(1)
   return row
 }

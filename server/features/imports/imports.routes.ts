@@ -17,7 +17,13 @@ import {
   importSummary,
 } from '#shared/schemas/import.ts'
 import { MOST_BYTES } from './importLimits.ts'
-import { allRows, getImport, importOfSameFile, listImports, listRows } from './imports.reads.ts'
+import {
+  allRows,
+  earlierImportOfSameFile,
+  getImport,
+  listImports,
+  listRows,
+} from './imports.reads.ts'
 import {
   discardImport,
   enterImport,
@@ -157,5 +163,5 @@ export const importRoutes = [
 
 async function shown(actor: Actor, importId: string): Promise<DataImport> {
   const row = await getImport(reader(), importId)
-  return toImport(row, await importOfSameFile(reader(), row.import), actor.personId)
+  return toImport(row, await earlierImportOfSameFile(reader(), row.import), actor.personId)
 }

@@ -21,7 +21,12 @@ import { IMPORT_STATE_LABELS, type ImportState } from '#shared/terms/importState
 import { checkMapping } from './checkMapping.ts'
 import { proposeDelimiter, readCsvHead } from './csvHead.ts'
 import { PIECE_BYTES } from './importLimits.ts'
-import { filePiece, importOfSameFile, linesWithFate, studyTerms } from './imports.reads.ts'
+import {
+  filePiece,
+  linesWithFate,
+  studyTerms,
+  unfinishedImportOfSameFile,
+} from './imports.reads.ts'
 import { stateOf } from './imports.view.ts'
 import { columnsOf, readColumns } from './readColumns.ts'
 import { requireText } from './uploadedFile.ts'
@@ -65,9 +70,9 @@ export async function uploadImport(
 
 /** A file that is under way already goes on where it is; one that was entered may come again. */
 async function refuseOpenTwin(tx: ChangeTx, studyId: string, fileHash: string): Promise<void> {
-  const twin = await importOfSameFile(tx.read, { studyId, fileHash })
-  if (!twin || twin.import.state === 'entered') return
-  const { id, number } = twin.import
+  const twin = await unfinishedImportOfSameFile(tx.read, { studyId, fileHash })
+  if (!twin) return
+  const { id, number } = twin
   const message = `This is the file of import ${number}, which is not finished. Go on there, or discard it first.`
   throw new AppError('already-exists', {
     message,

@@ -32,6 +32,7 @@ export function toImport(
   return {
     ...stored,
     state,
+    stopped: job?.state === 'cancelled' && state !== 'entered' && state !== 'discarded',
     failure:
       !working && state !== 'entered' && state !== 'discarded' ? (job?.failure ?? null) : null,
     columns: stored.columns ?? [],

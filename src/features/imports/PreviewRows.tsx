@@ -52,7 +52,10 @@ export function PreviewRows(props: PreviewRowsProps) {
 
 /** What a person wants to see first: rows to enter, or else why there are none. */
 const firstFate = ({ counts }: DataImport): RowFate =>
-  counts && counts.new === 0 && counts.refused > 0 ? 'refused' : 'new'
+  (['new', 'refused', 'same'] as const).find((fate) => counts && counts[fate] > 0) ?? 'new'
+
+/** The fate is shown by the segments above: to the table itself nothing is narrowed. */
+const asWhole = (table: TableParams): TableParams => ({ ...table, filters: {} })
 
 /** Few enough that the button below stays in reach. */
 const ROWS_A_PAGE = '20'
@@ -72,7 +75,7 @@ function Entries(props: PageProps & { fate: RowFate }) {
     () => entryColumns({ mapping: of.mapping, analytes, sites }),
     [of.mapping, analytes, sites],
   )
-  const choosing = fate === 'new' ? leftOut : null
+  const choosing = fate === 'new' && of.counts?.new ? leftOut : null
   return (
     <>
       {choosing && (
@@ -86,7 +89,7 @@ function Entries(props: PageProps & { fate: RowFate }) {
         columns={columns}
         rows={rows.data?.items}
         rowId={(row) => String(row.line)}
-        params={table}
+        params={asWhole(table)}
         order="server"
         page={rows.data}
         status={rows}
@@ -124,7 +127,7 @@ function Problems(props: PageProps) {
       columns={problemColumns}
       rows={lines}
       rowId={(row) => row.id}
-      params={props.table}
+      params={asWhole(props.table)}
       order="server"
       page={rows.data && { next: rows.data.next }}
       status={rows}

@@ -2,6 +2,7 @@ import { useState } from 'react'
 import type { DataImport, ImportCounts, ImportMapping } from '#shared/schemas/import.ts'
 import type { Analyte } from '#shared/schemas/protocol.ts'
 import type { Site } from '#shared/schemas/site.ts'
+import { Notice } from '../../ui/Notice.tsx'
 import { EnterForm } from './EnterForm.tsx'
 import { PreviewCounts } from './PreviewCounts.tsx'
 import { PreviewRows } from './PreviewRows.tsx'
@@ -27,6 +28,12 @@ export function RowsStep({ studyId, of, analytes, sites, locked }: RowsStepProps
   const enterable = of.counts.new > lines.size
   return (
     <>
+      {of.counts.new === 0 && (
+        <Notice title="Nothing of this file is left to enter">
+          Discard it, so that it does not stand in the way of the lock
+          {of.counts.refused > 0 ? ', or mend the refused rows and bring the mended file in' : ''}.
+        </Notice>
+      )}
       <PreviewCounts counts={of.counts} />
       <PreviewRows
         studyId={studyId}
