@@ -1,0 +1,115 @@
+import fc from 'fast-check'
+import { describe, expect, test } from 'vitest'
+import { readNumber } from '#shared/breath/file/readNumber.ts'
+import { readPlainRow } from '#shared/breath/file/readPlainRow.ts'
+
+const encoder = new TextEncoder()
+const numberOf = (text: string) => {
+  const bytes = encoder.encode(text)
+  return readNumber(bytes, 0, bytes.length)
+}
+
+const digits = (most: number) =>
+  fc
+    .array(fc.integer({ min: 0, max: 9 }), { minLength: 1, maxLength: most })
+    .map((all) => all.join(''))
+const sign = fc.constantFrom('', '-', '+')
+
+/** Plain decimals of any length, with or without fraction and exponent. */
+const decimal = fc
+  .tuple(
+    sign,
+    fc.oneof(
+      digits(25),
+      fc.tuple(digits(20), digits(25)).map(([whole, part]) => `${whole}.${part}`),
+      digits(12).map((whole) => `${whole}.`),
+      digits(20).map((part) => `.${part}`),
+    ),
+    fc.oneof(
+      fc.constant(''),
+      fc
+        .tuple(fc.constantFrom('e', 'E'), sign, fc.integer({ min: 0, max: 340 }))
+        .map((parts) => parts.join('')),
+    ),
+  )
+  .map((parts) => parts.join(''))
+
+test('a plain decimal of any length reads as Number() reads it', () => {
+  fc.assert(
+    fc.property(decimal, (text) => {
+      expect(Object.is(numberOf(text), Number(text))).toBe(true)
+    }),
+    { numRuns: 5000 },
+  )
+})
+
+test('every double that prints as a plain decimal reads back as itself', () => {
+  fc.assert(
+    fc.property(fc.double({ noNaN: true, noDefaultInfinity: true }), (value) => {
+      expect(numberOf(String(value))).toBe(Number(String(value)))
+    }),
+    { numRuns: 2000 },
+  )
+})
+
+test('whatever is no plain decimal is not a number, and whatever is one is', () => {
+  const plain = /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/
+  const pieces = fc.constantFrom('0', '7', '12', '.', '-', '+', 'e', 'E', 'x', ' ', ',', 'Infinity')
+  fc.assert(
+    fc.property(fc.array(pieces, { maxLength: 6 }), (parts) => {
+      const text = parts.join('')
+      expect(Number.isNaN(numberOf(text))).toBe(!plain.test(text))
+    }),
+    { numRuns: 5000 },
+  )
+})
+
+describe('numbers that try the rounding', () => {
+  test.each([
+    '9007199254740993',
+    '0.1',
+    '123456789012345',
+    '1e23',
+    '8.5e22',
+    '5e-324',
+    '2.2250738585072011e-308',
+    '1.7976931348623159e308',
+    '0e999999999',
+    '1e-999999999',
+    '0.30000000000000004',
+    '-0',
+    '000123.4500',
+  ])('%s reads as Number() reads it', (text) => {
+    expect(Object.is(numberOf(text), Number(text))).toBe(true)
+  })
+})
+
+test('a line of short decimals reads the quick way as Number() reads its cells', () => {
+  const cell = fc
+    .tuple(fc.boolean(), fc.integer({ min: 0, max: 999_999_999 }), fc.integer({ min: 0, max: 9 }))
+    .map(([isNegative, mantissa, decimals]) => {
+      const all = String(mantissa).padStart(decimals, '0')
+      const whole = all.slice(0, all.length - decimals)
+      return `${isNegative ? '-' : ''}${whole}${decimals ? `.${all.slice(all.length - decimals)}` : ''}`
+    })
+  fc.assert(
+    fc.property(
+      fc.array(cell, { minLength: 1, maxLength: 9 }),
+      fc.constantFrom('\n', '\r\n'),
+      (cells, end) => {
+        const bytes = encoder.encode(`${cells.join(',')}${end}`)
+        const row = new Float64Array(cells.length)
+        expect(readPlainRow(bytes, 0, row)).toBe(bytes.length)
+        expect([...row].every((value, i) => Object.is(value, Number(cells[i])))).toBe(true)
+      },
+    ),
+    { numRuns: 3000 },
+  )
+})
+
+test.each(['1,2', '1,2,3,4', '1,,3', '1,2,x', '1,2,3e1', ' 1,2,3', '1,2,1234567890', '1,2,3;', ''])(
+  'the quick way leaves the line "%s" to the careful one',
+  (line) => {
+    expect(readPlainRow(encoder.encode(`${line}\n`), 0, new Float64Array(3))).toBe(-1)
+  },
+)
