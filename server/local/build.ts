@@ -20,6 +20,7 @@ export async function buildProduct(folders: { client: string; server: string }):
     entryPoints: {
       main: 'server/main.ts',
       thread: 'server/jobs/thread.ts',
+      analysisThread: 'server/features/analyses/analysisThread.ts',
       migrate: 'db/migrate.ts',
     },
     bundle: true,

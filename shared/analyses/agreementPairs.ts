@@ -4,25 +4,33 @@ import type { LeftOutReason, SessionRule } from '#shared/terms/analysis.ts'
 import { LeftOut } from './leftOut.ts'
 import { oneValue } from './oneValue.ts'
 
-/** Sensor and reference analyser value of one analyte, pair by pair, both in its unit. */
+/** Sensor value of one analyte and reference analyser value of the same or another, pair by pair. */
 export type AgreementPairs = {
   sensor: number[]
   reference: number[]
-  /** Code of the subject that each pair came from. */
+  /** Code and key of the subject that each pair came from. */
   subjects: string[]
+  subjectIds: string[]
   counts: AgreementCounts
 }
 
 /**
- * Pairs the sensor's and the reference analyser's value of one analyte within each session. Where a
- * subject has several such sessions the rule chooses: the first, or the mean or median of each side.
+ * Pairs the sensor's and the reference analyser's value within each session. Where a subject has
+ * several such sessions the rule chooses: the first, the mean or median of each side, or all of them.
+ * @param referenceKey analyte of the reference values, the sensor's unless given
  */
 export function agreementPairs(
   rows: readonly DatasetRow[],
   analyteKey: string,
   rule: SessionRule,
+  referenceKey: string = analyteKey,
 ): AgreementPairs {
-  const pairs = { sensor: [] as number[], reference: [] as number[], subjects: [] as string[] }
+  const pairs = {
+    sensor: [] as number[],
+    reference: [] as number[],
+    subjects: [] as string[],
+    subjectIds: [] as string[],
+  }
   const leftOut = new LeftOut()
   let counted = 0
   let severalSessions = 0
@@ -31,25 +39,24 @@ export function agreementPairs(
   for (const sessions of subjects) {
     const both = sessions.flatMap((row) => {
       const sensor = row.sensorValues[analyteKey]
-      const reference = row.referenceValues[analyteKey]
+      const reference = row.referenceValues[referenceKey]
       return sensor && reference !== undefined ? [{ sensor, reference }] : []
     })
     if (both.length === 0) {
-      leftOut.add(leftOutReason(sessions, analyteKey))
+      leftOut.add(leftOutReason(sessions, analyteKey, referenceKey))
       continue
     }
     const used = rule === 'first' ? both.slice(0, 1) : both
     const sensor = used.map((pair) => pair.sensor.value)
     const reference = used.map((pair) => pair.reference)
-    if (rule === 'every') {
-      pairs.sensor.push(...sensor)
-      pairs.reference.push(...reference)
-    } else {
-      pairs.sensor.push(oneValue(sensor, rule))
-      pairs.reference.push(oneValue(reference, rule))
+    const entered = rule === 'every' ? used.length : 1
+    pairs.sensor.push(...(rule === 'every' ? sensor : [oneValue(sensor, rule)]))
+    pairs.reference.push(...(rule === 'every' ? reference : [oneValue(reference, rule)]))
+    const { subject, subjectId } = sessions[0]!
+    for (let pair = 0; pair < entered; pair += 1) {
+      pairs.subjects.push(subject)
+      pairs.subjectIds.push(subjectId)
     }
-    const { subject } = sessions[0]!
-    pairs.subjects.push(...(rule === 'every' ? used.map(() => subject) : [subject]))
     counted += 1
     belowLod += used.filter((pair) => pair.sensor.belowLod).length
     if (both.length > 1) severalSessions += 1
@@ -67,9 +74,13 @@ export function agreementPairs(
   }
 }
 
-function leftOutReason(sessions: readonly DatasetRow[], analyteKey: string): LeftOutReason {
+function leftOutReason(
+  sessions: readonly DatasetRow[],
+  analyteKey: string,
+  referenceKey: string,
+): LeftOutReason {
   const sensor = sessions.some((row) => row.sensorValues[analyteKey] !== undefined)
-  const reference = sessions.some((row) => row.referenceValues[analyteKey] !== undefined)
+  const reference = sessions.some((row) => row.referenceValues[referenceKey] !== undefined)
   if (sensor && reference) return 'notInOneSession'
   if (sensor) return 'noReferenceValue'
   return reference ? 'noSensorValue' : 'neitherValue'

@@ -21,7 +21,11 @@ export function asProtocol(protocol: ProtocolDocument, parameters: AnalysisParam
     const planned = plannedCutOff(protocol, parameters)
     return planned !== null && planned === parameters.cutOff
   }
-  const { analyteKey, acceptance } = parameters
+  // The protocol plans nothing of the other kinds yet.
+  if (parameters.kind !== 'agreement') return false
+  const { analyteKey, acceptance, scale } = parameters
+  // The protocol's limits are differences in the analyte's unit.
+  if (scale !== 'difference') return false
   const limits = protocol.acceptanceLimits.find((each) => each.analyteKey === analyteKey)
   return (
     limits !== undefined && limits.lower === acceptance?.lower && limits.upper === acceptance.upper

@@ -5,6 +5,11 @@ const ADVICE: Partial<Record<StatisticsErrorCode, string>> = {
   'one-class':
     'Choose another analyte, or look at Reference whether the outcomes were coded as meant.',
   'too-few': 'Choose another analyte, or see in the counts which values are missing.',
+  constant: 'Leave that analyte out, or choose another.',
+  separation:
+    'So the coefficients have no estimate. Leave out the analyte that separates them and look at it by itself under Accuracy, or wait for more subjects.',
+  collinear: 'Leave one of the analytes that say the same out of the panel.',
+  'no-convergence': 'Use fewer analytes, or logarithms where values spread widely.',
 }
 
 /** Why the figures cannot be computed, and what to do about it. */

@@ -1,21 +1,32 @@
 import { z } from 'zod'
 import {
-  ACCEPTANCE_VERDICTS,
   ANALYSIS_BADGES,
   ANALYSIS_KINDS,
   CUT_OFF_RULES,
   MEASURES,
   SESSION_RULES,
 } from '#shared/terms/analysis.ts'
+import { JOB_STATES } from '#shared/terms/job.ts'
 import { LOCK_KINDS } from '#shared/terms/lockState.ts'
 import { DIRECTIONS } from '#shared/terms/protocol.ts'
+import { accuracyMore, accuracyOptions } from './accuracyMore.ts'
+import {
+  agreementParameters,
+  agreementResult,
+  correlationParameters,
+  correlationResult,
+} from './agreement.ts'
 import { caution, id, instant, words } from './common.ts'
-import { accuracyCounts, agreementCounts } from './dataset.ts'
+import { comparisonParameters, comparisonResult } from './comparison.ts'
+import { accuracyCounts } from './dataset.ts'
+import { areaEstimate, bound, count, estimate, storedCurve } from './estimate.ts'
+import { panelParameters, panelResult } from './panel.ts'
+import { precisionParameters, precisionResult } from './precision.ts'
 
 const number = z.number({ error: 'Please give a number.' }).finite('Please give a number.')
 const probability = number.gt(0, 'Must lie between 0 and 1.').lt(1, 'Must lie between 0 and 1.')
 
-export const accuracyParameters = z.object({
+export const accuracyParameters = accuracyOptions.extend({
   kind: z.literal('accuracy'),
   analyteKey: z.string(),
   direction: z.enum(DIRECTIONS),
@@ -28,25 +39,13 @@ export const accuracyParameters = z.object({
 })
 export type AccuracyParameters = z.infer<typeof accuracyParameters>
 
-export const agreementParameters = z.object({
-  kind: z.literal('agreement'),
-  analyteKey: z.string(),
-  sessionRule: z.enum(SESSION_RULES),
-  confidence: probability,
-  /** Difference that would still be acceptable, in the analyte's unit. */
-  acceptance: z
-    .object({ lower: number, upper: number })
-    .refine((limits) => limits.lower < limits.upper, {
-      path: ['upper'],
-      message: 'The upper limit must be above the lower one.',
-    })
-    .nullable(),
-})
-export type AgreementParameters = z.infer<typeof agreementParameters>
-
 export const analysisParameters = z.discriminatedUnion('kind', [
   accuracyParameters,
   agreementParameters,
+  comparisonParameters,
+  panelParameters,
+  precisionParameters,
+  correlationParameters,
 ])
 export type AnalysisParameters = z.infer<typeof analysisParameters>
 
@@ -57,18 +56,6 @@ export const analysisRequest = z.object({
   parameters: analysisParameters,
 })
 export type AnalysisRequest = z.infer<typeof analysisRequest>
-
-const count = z.number().int().nonnegative()
-const bound = z.number().nullable()
-
-/** A figure with its interval; where a part is null, `note` says why. */
-const estimate = z.object({
-  estimate: z.number().nullable(),
-  lower: bound,
-  upper: bound,
-  method: z.string(),
-  note: z.string().nullable(),
-})
 
 /** One line of the table at a cut-off; n and N where it is a proportion. */
 export const measureRow = estimate.extend({
@@ -110,14 +97,9 @@ export type RuleCutOffs = z.infer<typeof ruleCutOffs>
 /** What does not hang on the cut-off: the curve, its area, the rules. */
 export const accuracyOverall = z.object({
   /** Null with fewer than 10 subjects in a class; `areaWithheld` says so. */
-  area: estimate.extend({ estimate: z.number(), standardError: bound }).nullable(),
+  area: areaEstimate.nullable(),
   areaWithheld: z.string().nullable(),
-  /** Point by point from nobody positive to everybody; the first threshold is null. */
-  curve: z.object({
-    thresholds: z.array(z.number().nullable()),
-    truePositives: z.array(count),
-    falsePositives: z.array(count),
-  }),
+  curve: storedCurve,
   /** Chosen from the data, so exploratory; empty where the area is withheld. */
   rules: z.array(ruleCutOffs),
 })
@@ -126,6 +108,7 @@ export type AccuracyOverall = z.infer<typeof accuracyOverall>
 const measured = { analyteName: z.string(), unit: z.string() }
 
 export const accuracyResult = accuracyOverall.extend({
+  ...accuracyMore.shape,
   kind: z.literal('accuracy'),
   ...measured,
   counts: accuracyCounts,
@@ -135,32 +118,14 @@ export const accuracyResult = accuracyOverall.extend({
 })
 export type AccuracyResult = z.infer<typeof accuracyResult>
 
-const line = z.object({ estimate: z.number(), lower: z.number(), upper: z.number() })
-
-/** Bias and limits of agreement; difference = sensor − reference, in the analyte's unit. */
-export const agreementFigures = z.object({
-  bias: line,
-  sd: z.number(),
-  lowerLimit: line,
-  upperLimit: line,
-  biasMethod: z.string(),
-  limitsMethod: z.string(),
-  acceptance: z
-    .object({ lower: z.number(), upper: z.number(), verdict: z.enum(ACCEPTANCE_VERDICTS) })
-    .nullable(),
-  /** What has to be known about these limits, as sentences. */
-  caveats: z.array(z.string()),
-})
-export type AgreementFigures = z.infer<typeof agreementFigures>
-
-export const agreementResult = agreementFigures.extend({
-  kind: z.literal('agreement'),
-  ...measured,
-  counts: agreementCounts,
-})
-export type AgreementResult = z.infer<typeof agreementResult>
-
-export const analysisResult = z.discriminatedUnion('kind', [accuracyResult, agreementResult])
+export const analysisResult = z.discriminatedUnion('kind', [
+  accuracyResult,
+  agreementResult,
+  comparisonResult,
+  panelResult,
+  precisionResult,
+  correlationResult,
+])
 export type AnalysisResult = z.infer<typeof analysisResult>
 
 export const analysisSummary = z.object({
@@ -187,6 +152,26 @@ export const analysisSummary = z.object({
   caution,
 })
 export type AnalysisSummary = z.infer<typeof analysisSummary>
+
+/** An analysis that takes a while: under way, or ended without a result. */
+export const analysisRun = z.object({
+  /** The key that the stored analysis will have. */
+  id,
+  jobId: id,
+  /** Null once it has ended: the queue then keeps nothing of the request. */
+  title: z.string().nullable(),
+  state: z.enum(JOB_STATES),
+  progressDone: z.number().int(),
+  progressTotal: z.number().int(),
+  progressWords: z.string().nullable(),
+  askedAt: instant,
+  askedByName: z.string(),
+  /** The reader asked for it, and may stop it. */
+  own: z.boolean(),
+  finishedAt: instant.nullable(),
+  failure: z.string().nullable(),
+})
+export type AnalysisRun = z.infer<typeof analysisRun>
 
 /** A stored analysis with all that it takes to read and to repeat it. */
 export const analysis = analysisSummary.extend({

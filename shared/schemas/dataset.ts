@@ -98,6 +98,11 @@ export const datasetValuesQuery = z.object({
   sessionRule: z.enum(SESSION_RULES).default('every'),
 })
 
+export const datasetPairsQuery = datasetValuesQuery.extend({
+  /** Analyte of the reference values, the sensor's unless given. */
+  referenceKey: z.string().max(40).optional(),
+})
+
 /** Who is counted in an agreement analysis, and who is not and why; every subject once. */
 export const agreementCounts = z.object({
   subjects: count,
@@ -117,8 +122,12 @@ export const datasetPairs = z.object({
   sessionRule: z.enum(SESSION_RULES),
   sensor: z.array(z.number()),
   reference: z.array(z.number()),
-  /** Subject code of each pair. */
+  /** Analyte and unit of the reference values. */
+  referenceKey: z.string(),
+  referenceUnit: z.string(),
+  /** Code and key of the subject of each pair. */
   subjects: z.array(z.string()),
+  subjectIds: z.array(id),
   counts: agreementCounts,
   caution,
 })

@@ -1,8 +1,19 @@
-export const ANALYSIS_KINDS = ['accuracy', 'agreement'] as const
+export const ANALYSIS_KINDS = [
+  'accuracy',
+  'agreement',
+  'comparison',
+  'panel',
+  'precision',
+  'correlation',
+] as const
 export type AnalysisKind = (typeof ANALYSIS_KINDS)[number]
 export const ANALYSIS_KIND_LABELS: Record<AnalysisKind, string> = {
   accuracy: 'Accuracy',
   agreement: 'Agreement',
+  comparison: 'Comparison',
+  panel: 'Panel of gases',
+  precision: 'Precision',
+  correlation: 'Rank correlation',
 }
 
 export const ANALYSIS_BADGES = ['planned', 'plannedAmended', 'exploratory'] as const
@@ -34,6 +45,9 @@ export const LEFT_OUT_REASONS = [
   'indeterminate',
   'noValuePresent',
   'noValueAbsent',
+  'incompletePresent',
+  'incompleteAbsent',
+  'inNeitherGroup',
   'neitherValue',
   'noSensorValue',
   'noReferenceValue',
@@ -46,6 +60,9 @@ export const LEFT_OUT_LABELS: Record<LeftOutReason, string> = {
   indeterminate: 'Reference outcome indeterminate',
   noValuePresent: 'Condition present, no valid sensor value',
   noValueAbsent: 'Condition absent, no valid sensor value',
+  incompletePresent: 'Condition present, not a valid value of every analyte',
+  incompleteAbsent: 'Condition absent, not a valid value of every analyte',
+  inNeitherGroup: 'In neither of the groups compared, or group not recorded',
   neitherValue: 'Neither a sensor nor a reference value',
   noSensorValue: 'No sensor value',
   noReferenceValue: 'No reference analyser value',
@@ -66,6 +83,45 @@ export const CUT_OFF_RULE_LABELS: Record<CutOffRule, string> = {
   sensitivityAtLeast: 'sensitivity ≥ 0.90',
   specificityAtLeast: 'specificity ≥ 0.90',
 }
+/** How the interval of an area is made. */
+export const AREA_INTERVALS = ['delong', 'logit', 'bootstrap'] as const
+export type AreaIntervalChoice = (typeof AREA_INTERVALS)[number]
+export const AREA_INTERVAL_LABELS: Record<AreaIntervalChoice, string> = {
+  delong: 'DeLong',
+  logit: 'DeLong, logit scale',
+  bootstrap: 'Bootstrap',
+}
+
+/** What subjects can be divided by to look at parts of them. */
+export const SUBGROUPINGS = ['site', 'sex', 'ageBand'] as const
+export type Subgrouping = (typeof SUBGROUPINGS)[number]
+export const SUBGROUPING_LABELS: Record<Subgrouping, string> = {
+  site: 'Site',
+  sex: 'Sex',
+  ageBand: 'Age band',
+}
+
+/** What is made of results in doubt. */
+export const SCENARIO_LABELS = {
+  leftOut: 'Left out',
+  countedPositive: 'Counted as positive',
+  countedNegative: 'Counted as negative',
+  best: 'All agree with the sensor',
+  worst: 'All disagree with the sensor',
+} as const
+
+/** How the flattery of fitting a panel to the same data is taken off. */
+export const PANEL_VALIDATIONS = ['bootstrap', 'crossValidation'] as const
+export type PanelValidation = (typeof PANEL_VALIDATIONS)[number]
+export const PANEL_VALIDATION_LABELS: Record<PanelValidation, string> = {
+  bootstrap: 'Bootstrap',
+  crossValidation: 'Cross-validation, 10 folds',
+}
+
+/** What stands beside a cut-off that a rule chose, where nothing was drawn to correct it. */
+export const NOT_CORRECTED =
+  'Sensitivity and specificity of a cut-off chosen from these data flatter it on the same data; they were not corrected in this analysis.'
+
 export const CHOSEN_FROM_DATA = 'Chosen from these data, so exploratory'
 
 /** What a two-by-two table tells, in the order in which it is shown. */

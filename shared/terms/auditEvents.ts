@@ -31,6 +31,7 @@ export const AUDIT_EVENT_LABELS: Readonly<Record<string, string>> = {
   'lock.approved': 'Lock approved',
 
   'analysis.run': 'Analysis run',
+  'analysis.requested': 'Analysis asked for',
   'analysis.repeated': 'Analysis run again',
   'report.requested': 'Report asked for',
   'report.issued': 'Report issued',

@@ -1,6 +1,13 @@
 import type { Measure } from './analysis.ts'
 import { unitLabel } from './gases.ts'
-import { formatEstimate, formatFraction, formatInterval, NOT_ESTIMABLE } from './numbers.ts'
+import {
+  formatConcentration,
+  formatCount,
+  formatEstimate,
+  formatFraction,
+  formatInterval,
+  NOT_ESTIMABLE,
+} from './numbers.ts'
 
 /** How results are written: one wording for the screen and the printed page. */
 type MeasureFigures = {
@@ -86,5 +93,49 @@ export function headlineTexts(headline: Headline | null): { figure: string; inte
   const { label, unit, decimals } = headline
   const { estimate, interval } = lineTexts(headline, decimals)
   const measured = withUnit(estimate, unit === null ? '' : unitLabel(unit))
-  return { figure: `${label} ${measured}`, interval }
+  return { figure: `${label} ${measured}`, interval: headline.lower === null ? '' : interval }
 }
+
+type Proportion = {
+  numerator: number
+  denominator: number
+  estimate: number | null
+  lower: number | null
+  upper: number | null
+}
+
+/** "48/90, 0.533 (0.431 to 0.633)". */
+export function proportionText({ numerator, denominator, estimate, lower, upper }: Proportion) {
+  const fraction = formatFraction(numerator, denominator)
+  if (estimate === null) return `${fraction}, ${NOT_ESTIMABLE}`
+  return `${fraction}, ${formatEstimate(estimate)} (${formatInterval(lower, upper)})`
+}
+
+type Troubled = {
+  zone: { lower: number; upper: number } | null
+  index: {
+    indeterminatePresent: number
+    indeterminateAbsent: number
+    noValidPresent: number
+    noValidAbsent: number
+  }
+  reference: { indexPositive: number; indexNegative: number }
+}
+
+/** How many results are in doubt or missing, and why. */
+export function troubledNote({ zone, index, reference }: Troubled): string {
+  const doubtful = zone
+    ? `Sensor results from ${formatConcentration(zone.lower)} to ${formatConcentration(zone.upper)} are taken as indeterminate: ${formatCount(index.indeterminatePresent)} with the condition, ${formatCount(index.indeterminateAbsent)} without.`
+    : 'No sensor result is taken as indeterminate.'
+  return `${doubtful} No valid sensor result: ${formatCount(index.noValidPresent)} with the condition, ${formatCount(index.noValidAbsent)} without; they count neither as positive nor as negative. Reference outcome indeterminate: ${formatCount(reference.indexPositive)} with a positive sensor result, ${formatCount(reference.indexNegative)} with a negative one.`
+}
+
+/** How the corrected figures of chosen cut-offs came about. */
+export const correctionNote = (of: {
+  method: string
+  replicates: number
+  seed: number
+  note: string | null
+}): string =>
+  of.note ??
+  `Corrected for having been chosen on the same data: ${of.method}, ${formatCount(of.replicates)} samples, seed ${of.seed} (Harrell, Lee & Mark 1996, Stat Med 15:361). All of them are exploratory.`

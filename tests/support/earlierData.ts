@@ -14,6 +14,9 @@ type Study = Awaited<ReturnType<Api['given']['study']>>
 type Reading = number | { value: number; belowLod: boolean }
 export type GivenSubject = {
   outcome?: Outcome | null
+  site?: 'north' | 'south'
+  sex?: 'F' | 'M'
+  covariates?: Record<string, string | number>
   sessions?: { sensor?: Record<string, Reading>; reference?: Record<string, number> }[]
 }
 
@@ -25,8 +28,8 @@ export async function fillStudy(api: Api, study: Study, given: GivenSubject[]): 
   const createdAt = new Date()
   const base = () => ({ id: randomUUID(), studyId: study.id, version: 1, createdAt })
   const analyteId = (key: string) => (key === 'acetone' ? study.acetone.id : study.ammonia.id)
-  const siteId = study.north.id
-  const codes = codesFor(study.north.prefix, given.length)
+  const codesOf = { north: codesFor(study.north.prefix), south: codesFor(study.south.prefix) }
+  const codes: string[] = []
   const rows = {
     subjects: [] as (typeof subjects.$inferInsert)[],
     sessions: [] as (typeof sessions.$inferInsert)[],
@@ -34,9 +37,13 @@ export async function fillStudy(api: Api, study: Study, given: GivenSubject[]): 
     references: [] as (typeof referenceMeasurements.$inferInsert)[],
     outcomes: [] as (typeof referenceOutcomes.$inferInsert)[],
   }
-  for (const [at, each] of given.entries()) {
-    const subject = { ...base(), siteId, code: codes[at]!, sex: 'F' as const }
-    rows.subjects.push({ ...subject, ageBand: '50-54', enrolledAt: createdAt, covariates: {} })
+  for (const each of given) {
+    const { site = 'north', sex = 'F', covariates = {} } = each
+    const siteId = study[site].id
+    const code = codesOf[site].next().value!
+    codes.push(code)
+    const subject = { ...base(), siteId, code, sex }
+    rows.subjects.push({ ...subject, ageBand: '50-54', enrolledAt: createdAt, covariates })
     if (each.outcome)
       rows.outcomes.push({ ...base(), siteId, subjectId: subject.id, outcome: each.outcome })
     for (const [number, { sensor = {}, reference = {} }] of (each.sessions ?? []).entries()) {
@@ -70,13 +77,11 @@ export async function fillStudy(api: Api, study: Study, given: GivenSubject[]): 
   return codes
 }
 
-function codesFor(prefix: string, many: number): string[] {
-  const codes: string[] = []
-  for (let number = 10_000; codes.length < many; number += 1) {
+function* codesFor(prefix: string): Generator<string, undefined> {
+  for (let number = 10_000; ; number += 1) {
     const code = subjectCode(prefix, String(number))
-    if (code) codes.push(code)
+    if (code) yield code
   }
-  return codes
 }
 
 /** A study lead, an oversight monitor and an analyst of the study. */

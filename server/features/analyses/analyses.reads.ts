@@ -6,6 +6,7 @@ import { locks } from '#db/schema/locks.ts'
 import { people } from '#db/schema/people.ts'
 import { protocolVersions } from '#db/schema/protocolVersions.ts'
 import { AppError } from '#shared/errors/AppError.ts'
+import type { AgreementScale } from '#shared/terms/agreementTerms.ts'
 
 type Line = { estimate: number; lower: number | null; upper: number | null }
 
@@ -26,7 +27,11 @@ const summary = {
   protocol: protocolVersions.document,
   area: picked<Line>('$.area'),
   bias: picked<Line>('$.bias'),
+  difference: picked<Line>('$.comparisons[0].difference'),
   sd: picked<number>('$.sd'),
+  scale: picked<AgreementScale>('$.scale'),
+  withinSubjectSd: picked<Line>('$.withinSubjectSd'),
+  rankCorrelation: picked<Line>('$.rankCorrelation'),
   unit: picked<string>('$.unit'),
 }
 

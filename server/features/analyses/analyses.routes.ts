@@ -5,12 +5,14 @@ import {
   analysis,
   analysisRepetition,
   analysisRequest,
+  analysisRun,
   analysisSummary,
 } from '#shared/schemas/analysis.ts'
 import { id } from '#shared/schemas/common.ts'
 import { getAnalysis, listAnalyses } from './analyses.reads.ts'
 import { repeatAnalysis, runAnalysis } from './analyses.service.ts'
 import { toAnalysis, toAnalysisSummary } from './analyses.view.ts'
+import { askForRun, listRuns } from './analysisRuns.ts'
 
 const ofStudy = {
   path: '/api/studies/:studyId/analyses',
@@ -22,7 +24,25 @@ const ofAnalysis = {
   of: ({ analysisId }: { analysisId: string }) => ({ analysisId }),
 } as const
 
+const runsOfStudy = { ...ofStudy, path: '/api/studies/:studyId/analysis-runs' } as const
+
 export const analysisRoutes = [
+  route({
+    ...runsOfStudy,
+    method: 'get',
+    action: 'analysis.list',
+    returns: z.array(analysisRun),
+    handle: ({ actor, params }) => listRuns(actor, params.studyId),
+  }),
+  route({
+    ...runsOfStudy,
+    method: 'post',
+    status: 202,
+    action: 'analysis.run',
+    body: analysisRequest,
+    returns: analysisRun,
+    handle: ({ actor, params, body }) => askForRun(actor, params.studyId, body),
+  }),
   route({
     ...ofStudy,
     method: 'get',

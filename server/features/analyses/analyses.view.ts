@@ -1,6 +1,11 @@
 import { asProtocol } from '#shared/analyses/asProtocol.ts'
 import { headlineOf } from '#shared/analyses/headlineOf.ts'
-import { type Analysis, type AnalysisSummary, analysisResult } from '#shared/schemas/analysis.ts'
+import {
+  type Analysis,
+  type AnalysisSummary,
+  analysisParameters,
+  analysisResult,
+} from '#shared/schemas/analysis.ts'
 import { CAUTIONS } from '#shared/terms/cautions.ts'
 import type { AnalysisRow, AnalysisSummaryRow } from './analyses.reads.ts'
 
@@ -17,6 +22,7 @@ export function toAnalysisSummary(row: AnalysisSummaryRow): AnalysisSummary {
 export const toAnalysis = (row: AnalysisRow): Analysis => ({
   ...row,
   ...toAnalysisSummary(row),
+  parameters: analysisParameters.parse(row.parameters),
   result: analysisResult.parse(JSON.parse(row.result)),
   asProtocol: asProtocol(row.protocol, row.parameters),
   targetCondition: row.protocol.targetCondition,

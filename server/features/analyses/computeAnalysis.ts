@@ -4,75 +4,46 @@ import {
   frozenAnalyte,
   readDatasetRows,
 } from '#server/features/datasets/datasets.reads.ts'
-import { accuracyAtCutOffOf } from '#shared/analyses/accuracyAtCutOffOf.ts'
-import { accuracyOverallOf } from '#shared/analyses/accuracyOverallOf.ts'
-import { accuracyValues } from '#shared/analyses/accuracyValues.ts'
-import { agreementFiguresOf } from '#shared/analyses/agreementFiguresOf.ts'
-import { agreementPairs } from '#shared/analyses/agreementPairs.ts'
-import { plannedCutOff } from '#shared/analyses/asProtocol.ts'
+import { analytesOf } from '#shared/analyses/analytesOf.ts'
+import { drawsOf } from '#shared/analyses/drawsOf.ts'
 import { refusalSentence } from '#shared/analyses/refusalSentence.ts'
+import { resultOf } from '#shared/analyses/resultOf.ts'
 import { AppError } from '#shared/errors/AppError.ts'
-import type {
-  AccuracyParameters,
-  AccuracyResult,
-  AgreementParameters,
-  AgreementResult,
-  AnalysisParameters,
-  AnalysisResult,
-} from '#shared/schemas/analysis.ts'
-import type { DatasetRow } from '#shared/schemas/dataset.ts'
+import type { AnalysisParameters, AnalysisResult } from '#shared/schemas/analysis.ts'
 import { StatisticsError } from '#shared/statistics/StatisticsError.ts'
+import { computeInThread } from './computeInThread.ts'
+import { storedAreaFor } from './storedArea.ts'
 
-type Of<P> = { dataset: DatasetRecord; rows: readonly DatasetRow[]; parameters: P }
+/** @throws AppError invalid, at the field of an analyte that the dataset does not hold */
+export function requireAnalytes(dataset: DatasetRecord, parameters: AnalysisParameters): void {
+  for (const { key, field } of analytesOf(parameters))
+    frozenAnalyte(dataset.manifest, key, `parameters.${field}`)
+}
 
 /**
- * Computes an analysis from frozen rows alone: the same dataset, parameters and build give the same
- * digits.
+ * Computes an analysis from frozen rows alone: what draws at random in a thread of its own, since it
+ * would hold up others, the rest at once.
+ * @param onProgress told the share done, one call after the other; rejecting stops the computation
  * @throws AppError invalid (no such analyte), statistics-refused
  */
 export async function computeAnalysis(
   read: Reader,
-  dataset: DatasetRecord,
+  { id, manifest, protocol }: DatasetRecord,
   parameters: AnalysisParameters,
+  onProgress?: (share: number) => Promise<void>,
 ): Promise<AnalysisResult> {
-  frozenAnalyte(dataset.manifest, parameters.analyteKey, 'parameters.analyteKey')
-  const rows = await readDatasetRows(read, dataset.id)
+  const frozen = {
+    manifest,
+    protocol,
+    rows: await readDatasetRows(read, id),
+    storedArea: await storedAreaFor(read, id, parameters),
+  }
   try {
-    return parameters.kind === 'accuracy'
-      ? accuracyResult({ dataset, rows, parameters })
-      : agreementResult({ dataset, rows, parameters })
+    return drawsOf(parameters)
+      ? await computeInThread(frozen, parameters, onProgress)
+      : resultOf(frozen, parameters)
   } catch (error) {
     if (!(error instanceof StatisticsError)) throw error
     throw new AppError('statistics-refused', { message: refusalSentence(error) })
   }
-}
-
-function accuracyResult({ dataset, rows, parameters }: Of<AccuracyParameters>): AccuracyResult {
-  const { analyteKey, sessionRule, cutOff } = parameters
-  const { sampling } = dataset.protocol
-  const values = accuracyValues(rows, analyteKey, sessionRule)
-  return {
-    kind: 'accuracy',
-    ...measured(dataset, analyteKey),
-    counts: values.counts,
-    plannedCutOff: plannedCutOff(dataset.protocol, parameters),
-    ...accuracyOverallOf(values, parameters),
-    atCutOff:
-      cutOff === null ? null : accuracyAtCutOffOf(values, cutOff, { ...parameters, sampling }),
-  }
-}
-
-function agreementResult({ dataset, rows, parameters }: Of<AgreementParameters>): AgreementResult {
-  const pairs = agreementPairs(rows, parameters.analyteKey, parameters.sessionRule)
-  return {
-    kind: 'agreement',
-    ...measured(dataset, parameters.analyteKey),
-    counts: pairs.counts,
-    ...agreementFiguresOf(pairs, parameters),
-  }
-}
-
-function measured({ manifest }: DatasetRecord, analyteKey: string) {
-  const { name, unit } = frozenAnalyte(manifest, analyteKey, 'parameters.analyteKey')
-  return { analyteName: name, unit }
 }

@@ -1,10 +1,12 @@
 import type { ReportBlock } from '#server/reports/reportDocument.ts'
 import { accuracyValues } from '#shared/analyses/accuracyValues.ts'
+import { curvePoints } from '#shared/analyses/curvePoints.ts'
 import { cutOffLabel } from '#shared/analyses/cutOffLabel.ts'
 import { OutcomeStrip } from '#shared/figures/OutcomeStrip.tsx'
 import { RocCurve } from '#shared/figures/RocCurve.tsx'
-import type { RocCurvePoint, RocCutOff } from '#shared/figures/rocCurveTypes.ts'
+import type { RocCutOff } from '#shared/figures/rocCurveTypes.ts'
 import type { AccuracyParameters, AccuracyResult } from '#shared/schemas/analysis.ts'
+import { NOT_CORRECTED } from '#shared/terms/analysis.ts'
 import { unitLabel } from '#shared/terms/gases.ts'
 import {
   formatConcentration,
@@ -13,8 +15,9 @@ import {
   formatInterval,
 } from '#shared/terms/numbers.ts'
 import { POSITIVE_RULES } from '#shared/terms/protocol.ts'
-import { intervalHeading, withUnit } from '#shared/terms/resultText.ts'
+import { correctionNote, intervalHeading, withUnit } from '#shared/terms/resultText.ts'
 import type { ReportSource, StoredAnalysis } from '../reportSource.ts'
+import { accuracyMoreBlocks } from './accuracyMoreBlocks.ts'
 import { cutOffBlocks, cutOffTable } from './cutOffBlocks.ts'
 
 /** Area, curve, values by outcome, and what the cut-off tells. */
@@ -49,9 +52,17 @@ export function accuracyBlocks(
     },
     stripBlock(source, parameters, result, `${id}-strip`),
     cutOffTable(result, unit),
+    ...(result.rules.length > 0 ? [correctionBlock(result)] : []),
     ...(result.atCutOff ? cutOffBlocks(result.atCutOff, result, parameters) : []),
+    ...accuracyMoreBlocks(result),
   ]
 }
+
+const correctionBlock = ({ corrections }: AccuracyResult): ReportBlock => ({
+  kind: 'paragraph',
+  quiet: true,
+  text: corrections ? correctionNote(corrections) : NOT_CORRECTED,
+})
 
 function areaBlocks(
   { area, areaWithheld }: AccuracyResult,
@@ -71,21 +82,6 @@ function areaBlocks(
   ]
   if (area.note) blocks.push({ kind: 'paragraph', quiet: true, text: area.note })
   return blocks
-}
-
-/** The last point calls everybody positive, so it holds the numbers of both classes. */
-function curvePoints({
-  thresholds,
-  truePositives,
-  falsePositives,
-}: AccuracyResult['curve']): RocCurvePoint[] {
-  const present = truePositives.at(-1) ?? 1
-  const absent = falsePositives.at(-1) ?? 1
-  return thresholds.map((threshold, at) => ({
-    threshold,
-    sensitivity: truePositives[at]! / present,
-    falsePositiveFraction: falsePositives[at]! / absent,
-  }))
 }
 
 function markOf(result: AccuracyResult, unit: string): RocCutOff {

@@ -1,90 +1,117 @@
 import type { ReportBlock } from '#server/reports/reportDocument.ts'
-import { agreementPairs } from '#shared/analyses/agreementPairs.ts'
+import { agreementHintWords } from '#shared/analyses/agreementHintWords.ts'
+import { type AgreementPairs, agreementPairs } from '#shared/analyses/agreementPairs.ts'
+import { limitsTable, lineUnit, replicatesWords } from '#shared/analyses/agreementTables.ts'
+import {
+  correlationsTable,
+  fittedLinesTable,
+  levelsTable,
+} from '#shared/analyses/comparisonTables.ts'
+import { differencePlotOf } from '#shared/analyses/differencePlotOf.ts'
+import { outsideWords } from '#shared/analyses/outsideLimits.ts'
+import { scatterFitOf } from '#shared/analyses/scatterFitOf.ts'
 import { DifferencePlot } from '#shared/figures/DifferencePlot.tsx'
-import type { AgreementResult } from '#shared/schemas/analysis.ts'
+import { ScatterIdentity } from '#shared/figures/ScatterIdentity.tsx'
+import type { AgreementParameters, AgreementResult } from '#shared/schemas/agreement.ts'
+import { MIDDLE_LINE_LABELS } from '#shared/terms/agreementTerms.ts'
 import { ACCEPTANCE_VERDICT_WORDS } from '#shared/terms/analysis.ts'
 import { unitLabel } from '#shared/terms/gases.ts'
-import { formatConcentration, formatCount, formatEstimate } from '#shared/terms/numbers.ts'
-import {
-  agreementDecimals,
-  intervalHeading,
-  lineTexts,
-  withUnit,
-} from '#shared/terms/resultText.ts'
+import { formatConcentration, formatCount } from '#shared/terms/numbers.ts'
+import { agreementDecimals, lineTexts, withUnit } from '#shared/terms/resultText.ts'
 import type { ReportSource, StoredAnalysis } from '../reportSource.ts'
+import { resultTableBlocks } from './resultTableBlocks.ts'
 
-type Line = AgreementResult['bias']
+type Of = { pairs: AgreementPairs; parameters: AgreementParameters; result: AgreementResult }
 
-/** Bias and limits of agreement, the plot of differences, and how they stand to what would be acceptable. */
+/** Bias and limits of agreement with their plot, how they stand to what would be acceptable, and lines. */
 export function agreementBlocks(
   { rows }: ReportSource,
   { number, parameters }: StoredAnalysis,
   result: AgreementResult,
 ): ReportBlock[] {
-  const { acceptance, bias, lowerLimit, upperLimit } = result
-  const unit = unitLabel(result.unit)
-  const inUnit = unit ? ` (${unit})` : ''
-  const decimals = agreementDecimals(result.sd)
+  if (parameters.kind !== 'agreement') throw new Error('The parameters are of another kind.')
   const pairs = agreementPairs(rows, parameters.analyteKey, parameters.sessionRule)
+  const of = { pairs, parameters, result }
   return [
-    {
-      kind: 'subheading',
-      text: `Bias ${withUnit(lineTexts(bias, decimals).estimate, unit)} (${lineTexts(bias, decimals).interval})`,
-    },
-    {
-      kind: 'paragraph',
-      quiet: true,
-      text: `Difference = sensor − reference. Standard deviation of the differences ${withUnit(formatEstimate(result.sd, decimals), unit)}.`,
-    },
-    ...(acceptance
-      ? [
-          {
-            kind: 'paragraph' as const,
-            text: `Acceptable: ${formatConcentration(acceptance.lower)} to ${withUnit(formatConcentration(acceptance.upper), unit)}. ${ACCEPTANCE_VERDICT_WORDS[acceptance.verdict]}`,
-          },
-        ]
-      : []),
-    {
-      kind: 'figure',
-      share: 0.94,
-      caption: `Difference against mean of ${formatCount(pairs.sensor.length)} pairs of ${result.analyteName} (Bland–Altman), with bias, limits of agreement and their intervals.`,
-      figure: (
-        <DifferencePlot
-          id={`analysis-${number}-difference`}
-          unit={unit}
-          pairs={pairs.sensor.map((sensor, at) => {
-            const reference = pairs.reference[at]!
-            return { mean: (sensor + reference) / 2, difference: sensor - reference }
-          })}
-          bias={drawn(bias)}
-          lowerLimit={drawn(lowerLimit)}
-          upperLimit={drawn(upperLimit)}
-          {...(acceptance ? { acceptance } : {})}
-        />
-      ),
-    },
-    {
-      kind: 'table',
-      columns: [
-        { label: 'Line' },
-        { label: `Estimate${inUnit}`, align: 'right' },
-        { label: `${intervalHeading(parameters.confidence)}${inUnit}`, align: 'right' },
-        { label: 'Method' },
-      ],
-      rows: [
-        ['Upper limit', upperLimit, result.limitsMethod] as const,
-        ['Bias', bias, result.biasMethod] as const,
-        ['Lower limit', lowerLimit, result.limitsMethod] as const,
-      ].map(([label, line, method]) => {
-        const { estimate, interval } = lineTexts(line, decimals)
-        return [label, estimate, interval, method]
-      }),
-    },
-    ...result.caveats.map((text) => ({ kind: 'paragraph' as const, text, quiet: true })),
+    ...headBlocks(result),
+    plotBlock(of, number),
+    ...limitsBlocks(of),
+    ...comparisonBlocks(of, number),
   ]
 }
 
-const drawn = ({ estimate, lower, upper }: Line) => ({
-  intercept: estimate,
-  interval: { lower, upper },
+function headBlocks(result: AgreementResult): ReportBlock[] {
+  const { bias, sd, scale, acceptance } = result
+  const { estimate, interval } = lineTexts(bias, agreementDecimals(sd))
+  const unit = lineUnit(result, unitLabel(result.unit))
+  const blocks: ReportBlock[] = [
+    {
+      kind: 'subheading',
+      text: `${MIDDLE_LINE_LABELS[scale]} ${withUnit(estimate, unit)} (${interval})`,
+    },
+  ]
+  if (acceptance)
+    blocks.push({
+      kind: 'paragraph',
+      text: `Acceptable: ${formatConcentration(acceptance.lower)} to ${withUnit(formatConcentration(acceptance.upper), unit)}. ${ACCEPTANCE_VERDICT_WORDS[acceptance.verdict]}`,
+    })
+  return blocks
+}
+
+const plotBlock = ({ pairs, result }: Of, number: number): ReportBlock => ({
+  kind: 'figure',
+  share: 0.94,
+  caption: `Difference against mean of ${formatCount(pairs.sensor.length)} pairs of ${result.analyteName} (Bland–Altman), with the middle line, limits of agreement and their intervals.`,
+  figure: (
+    <DifferencePlot
+      id={`analysis-${number}-difference`}
+      {...differencePlotOf(pairs, result, unitLabel(result.unit))}
+    />
+  ),
 })
+
+function limitsBlocks({ pairs, parameters, result }: Of): ReportBlock[] {
+  const unit = unitLabel(result.unit)
+  const sentences = [
+    replicatesWords(result, unit),
+    ...result.caveats,
+    ...agreementHintWords(result),
+    outsideWords(pairs, result),
+  ].filter((text) => text !== null)
+  return [
+    ...resultTableBlocks(limitsTable(result, unit, parameters.confidence)),
+    ...sentences.map((text) => ({ kind: 'paragraph' as const, text, quiet: true })),
+  ]
+}
+
+function comparisonBlocks({ pairs, parameters, result }: Of, number: number): ReportBlock[] {
+  const { comparison, comparisonWithheld } = result
+  if (!comparison) return resultTableBlocks(comparisonWithheld)
+  const unit = unitLabel(result.unit)
+  const { confidence, errorVarianceRatio } = parameters
+  const fit = scatterFitOf(comparison, 'deming')
+  const at = {
+    unit,
+    confidence,
+    errorVarianceRatio,
+    sd: result.scale === 'ratio' || result.scale === 'percent' ? spreadOf(pairs) : result.sd,
+  }
+  return [
+    {
+      kind: 'figure',
+      share: 0.62,
+      caption: `Sensor against reference of ${result.analyteName}${fit ? ', with the Deming line' : ''}.`,
+      figure: (
+        <ScatterIdentity
+          id={`analysis-${number}-scatter`}
+          pairs={pairs.sensor.map((sensor, at) => ({ sensor, reference: pairs.reference[at]! }))}
+          unit={unit}
+          {...(fit ? { fit } : {})}
+        />
+      ),
+    },
+    ...resultTableBlocks(fittedLinesTable(comparison, at)),
+    ...resultTableBlocks(levelsTable(comparison, at)),
+    ...resultTableBlocks(correlationsTable(comparison, confidence)),
+  ]
+}

@@ -47,7 +47,7 @@ export function standingOf({ study }: ReportSource, badge: StoredAnalysis['badge
 
 /** Who is counted, of how many. */
 export function countedInWords(result: StoredAnalysis['result']): string {
-  if (result.kind === 'accuracy') {
+  if ('present' in result.counts) {
     const { present, absent, subjects, values } = result.counts
     const counted = present + absent
     const several = values > counted ? `, ${formatCount(values)} values` : ''

@@ -8,6 +8,8 @@ import type { ReportSource, StoredAnalysis } from '../reportSource.ts'
 import { accuracyBlocks } from './accuracyBlocks.tsx'
 import { agreementBlocks } from './agreementBlocks.tsx'
 import { analysisFacts, countedInWords } from './analysisFacts.ts'
+import { comparisonBlocks } from './comparisonBlocks.tsx'
+import { panelBlocks } from './panelBlocks.tsx'
 import { reportFrame, shownOfRun } from './reportFrame.ts'
 
 const NEW_PAGE: ReportBlock = { kind: 'pageBreak' }
@@ -58,28 +60,40 @@ function summarySection(source: ReportSource): ReportSection {
   }
 }
 
-const NO_PARTS = { area: null, bias: null, sd: null, unit: null }
+const NO_PARTS = { area: null, bias: null, difference: null, sd: null, unit: null }
 
 function headlineText(result: AnalysisResult): string {
-  const { figure, interval } = headlineTexts(headlineOf(result.kind, { ...NO_PARTS, ...result }))
+  const { figure, interval } = headlineTexts(
+    headlineOf(result.kind, { ...NO_PARTS, ...differenceOf(result), ...result }),
+  )
   return interval ? `${figure}\n(${interval})` : figure
 }
+
+const differenceOf = (result: AnalysisResult) =>
+  result.kind === 'comparison' ? { difference: result.comparisons[0]?.difference ?? null } : {}
 
 function analysisSection(
   source: ReportSource,
   analysis: StoredAnalysis,
   end: readonly ReportBlock[],
 ): ReportSection {
-  const { result } = analysis
   return {
     heading: `${analysis.number}. ${analysis.title}`,
-    blocks: [
-      ...analysisFacts(source, analysis),
-      ...(result.kind === 'accuracy'
-        ? accuracyBlocks(source, analysis, result)
-        : agreementBlocks(source, analysis, result)),
-      ...end,
-    ],
+    blocks: [...analysisFacts(source, analysis), ...resultBlocks(source, analysis), ...end],
+  }
+}
+
+function resultBlocks(source: ReportSource, analysis: StoredAnalysis): ReportBlock[] {
+  const { result } = analysis
+  switch (result.kind) {
+    case 'accuracy':
+      return accuracyBlocks(source, analysis, result)
+    case 'agreement':
+      return agreementBlocks(source, analysis, result)
+    case 'comparison':
+      return comparisonBlocks(analysis, result)
+    case 'panel':
+      return panelBlocks(analysis, result)
   }
 }
 
@@ -101,6 +115,8 @@ function methodsSection({ analyses }: ReportSource): ReportSection {
 
 function methodNames(result: AnalysisResult): string[] {
   if (result.kind === 'agreement') return [result.biasMethod, result.limitsMethod]
+  if (result.kind === 'comparison') return result.curves.flatMap(({ area }) => area?.method ?? [])
+  if (result.kind === 'panel') return []
   return [
     ...(result.area ? [result.area.method] : []),
     ...(result.atCutOff?.measures.map((measure) => measure.method) ?? []),

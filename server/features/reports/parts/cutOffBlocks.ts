@@ -5,7 +5,12 @@ import type {
   AccuracyParameters,
   AccuracyResult,
 } from '#shared/schemas/analysis.ts'
-import { ANALYSIS_BADGE_LABELS, CUT_OFF_RULE_LABELS, measureLabel } from '#shared/terms/analysis.ts'
+import {
+  ANALYSIS_BADGE_LABELS,
+  CUT_OFF_RULE_LABELS,
+  type CutOffRule,
+  measureLabel,
+} from '#shared/terms/analysis.ts'
 import { unitLabel } from '#shared/terms/gases.ts'
 import { formatConcentration, formatCount, formatEstimate } from '#shared/terms/numbers.ts'
 import { POSITIVE_RULES } from '#shared/terms/protocol.ts'
@@ -34,9 +39,11 @@ export function cutOffTable(result: AccuracyResult, unit: string): ReportTable {
       { label: 'Cut-off', align: 'right' },
       { label: 'Sensitivity', align: 'right' },
       { label: 'Specificity', align: 'right' },
+      { label: 'Sensitivity, corrected', align: 'right' },
+      { label: 'Specificity, corrected', align: 'right' },
     ],
     rows: [
-      ...planned,
+      ...planned.map((row) => [...row, 'not needed', 'not needed']),
       ...rules.map(({ rule, cutOffs: [preferred] }) => [
         ANALYSIS_BADGE_LABELS.exploratory,
         `from these data: ${CUT_OFF_RULE_LABELS[rule]}`,
@@ -45,9 +52,16 @@ export function cutOffTable(result: AccuracyResult, unit: string): ReportTable {
           : withUnit(formatConcentration(preferred.threshold), unit),
         formatEstimate(preferred?.sensitivity),
         formatEstimate(preferred?.specificity),
+        ...correctedTexts(result, rule),
       ]),
     ],
   }
+}
+
+function correctedTexts({ corrections }: AccuracyResult, rule: CutOffRule): [string, string] {
+  const found = corrections?.rules.find((each) => each.rule === rule)
+  if (!found) return ['not corrected', 'not corrected']
+  return [formatEstimate(found.corrected.sensitivity), formatEstimate(found.corrected.specificity)]
 }
 
 /** Sensitivity and specificity at the planned cut-off, where the analysis was run at it. */

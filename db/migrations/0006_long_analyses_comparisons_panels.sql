@@ -1,0 +1,2 @@
+ALTER TABLE `analyses` MODIFY COLUMN `kind` enum('accuracy','agreement','comparison','panel') NOT NULL;--> statement-breakpoint
+ALTER TABLE `jobs` MODIFY COLUMN `kind` enum('import.preview','import.enter','report.write','analysis.run') NOT NULL;

@@ -1,0 +1,249 @@
+import { afterAll, beforeAll, describe, expect, test } from 'vitest'
+import { type Api, startApi } from '../support/api.ts'
+import { breathAmmonia, breathAmmoniaReference } from '../support/breathAmmonia.ts'
+import type { GivenSubject } from '../support/earlierData.ts'
+import { lockedStudy } from '../support/lockedStudy.ts'
+import { inventedProtocol } from '../support/makers.ts'
+import { hasReference, referenceRows, referenceValue } from '../support/referenceFolder.ts'
+
+let api: Api
+let ammonia: Awaited<ReturnType<typeof lockedStudy>>
+beforeAll(async () => {
+  api = await startApi()
+  ammonia = await lockedStudy(api, breathAmmonia())
+})
+afterAll(() => api.stop())
+
+const marker = (analyteKey: string) => ({ analyteKey, direction: 'higher' })
+const paired = (more: object = {}) => ({
+  kind: 'comparison',
+  sessionRule: 'first',
+  confidence: 0.95,
+  compare: {
+    design: 'paired',
+    markers: [marker('ammonia'), marker('acetone')],
+    adjust: false,
+    permutations: null,
+    ...more,
+  },
+})
+const independent = (analyteKey: string, by: object, groups: string[]) => ({
+  kind: 'comparison',
+  sessionRule: 'first',
+  confidence: 0.95,
+  compare: { design: 'independent', marker: marker(analyteKey), by, groups },
+})
+
+/** s100b under the key of ammonia, ndka under that of acetone. */
+const asahSubjects = () =>
+  referenceRows('reference/data/asah.csv').map(
+    (row): GivenSubject => ({
+      outcome: row.label === '1' ? 'present' : 'absent',
+      sessions: [{ sensor: { ammonia: Number(row.s100b), acetone: Number(row.ndka) } }],
+    }),
+  )
+
+type Areas = { auc1: number; auc2: number; difference: number; z: number; p: number }
+
+describe('areas of several biomarkers in the same subjects', () => {
+  test('differ as R’s paired DeLong says', async () => {
+    const { body, status } = await ammonia.run(paired())
+    expect(status).toBe(201)
+    const expected = breathAmmoniaReference<Areas & { ci95: { lower: number; upper: number } }>(
+      'ammonia_ppb vs isoprene_ppb',
+      'paired_auc_difference',
+    )
+    const [one] = body.result.comparisons
+    expect(body.result.curves.map((each: { label: string }) => each.label)).toEqual([
+      'Ammonia',
+      'Acetone',
+    ])
+    expect(one.difference.estimate).toBeCloseTo(expected.difference, 12)
+    expect(one.statistic).toBeCloseTo(expected.z, 9)
+    expect(one.p).toBeCloseTo(expected.p, 9)
+    expect(one.pAdjusted).toBeNull()
+    expect(body.headline).toMatchObject({ label: 'Difference of areas' })
+  })
+
+  test('are compared in the subjects who have all of them, and the others are counted', async () => {
+    const given = breathAmmonia()
+    delete given[0]!.sessions![0]!.sensor!.acetone
+    const { run } = await lockedStudy(api, given)
+    const { body } = await run(paired())
+    expect(body.result.counts).toMatchObject({
+      subjects: 240,
+      present: 90,
+      absent: 149,
+      leftOut: [{ reason: 'incompleteAbsent', subjects: 1 }],
+    })
+  })
+
+  test('take permutations as a job, and give the same curve twice a p value of 1', async () => {
+    const given = breathAmmonia().map((each): GivenSubject => {
+      const { ammonia } = each.sessions![0]!.sensor!
+      return { ...each, sessions: [{ sensor: { ammonia: ammonia!, acetone: ammonia! } }] }
+    })
+    const { runLong } = await lockedStudy(api, given)
+    const permutations = { seed: 3, replicates: 2_000 }
+    const { result } = await runLong(paired({ permutations }))
+    const [one] = result.comparisons
+    expect(one).toMatchObject({ p: 1, difference: { estimate: 0 } })
+    expect(one.permutation).toEqual({ statistic: 0, p: 1, permutations: 2_000, seed: 3 })
+  })
+
+  test('need no adjusting where they are two, and two different ones', async () => {
+    const study = await lockedStudy(api, breathAmmonia())
+    const { body } = await study.run(paired({ adjust: true }))
+    // One pair alone needs no adjusting.
+    expect(body.result.comparisons[0].pAdjusted).toBeNull()
+    const same = await study.run(paired({ markers: [marker('ammonia'), marker('ammonia')] }))
+    expect(Object.keys(same.body.fields)).toEqual(['parameters.compare.markers'])
+  })
+
+  const asahRoc = 'reference/results/roc-asah.json'
+  test.skipIf(!hasReference(asahRoc))(
+    's100b and ndka in 113 patients: R’s statistic of the permutation test, and a p value near its own [skipped where the data set is absent]',
+    async () => {
+      const { runLong } = await lockedStudy(api, asahSubjects())
+      const { result } = await runLong(paired({ permutations: { seed: 3, replicates: 20_000 } }))
+      const expected = referenceValue<{ statistic: number; p: number }>(
+        asahRoc,
+        's100b vs ndka',
+        'paired_venkatraman',
+      )
+      const { permutation, p } = result.comparisons[0]
+      const { p: pDelong } = referenceValue<Areas>(
+        asahRoc,
+        's100b vs ndka',
+        'paired_auc_difference',
+      )
+      expect(p).toBeCloseTo(pDelong, 9)
+      expect(permutation.statistic).toBe(expected.statistic)
+      // R drew 2,000 permutations: four Monte-Carlo SDs of its p value.
+      expect(Math.abs(permutation.p - expected.p)).toBeLessThan(0.0366)
+    },
+  )
+
+  test('with fewer than ten in a class are counted and nothing else', async () => {
+    const few = breathAmmonia().filter((_, at) => at % 20 === 0)
+    const { run } = await lockedStudy(api, few)
+    const { body } = await run(paired())
+    expect(body.result.comparisons).toEqual([])
+    expect(body.result.areaWithheld).toContain('at least 10 subjects')
+    expect(body.result.curves.map((each: { area: unknown }) => each.area)).toEqual([null, null])
+  })
+})
+
+describe('the area of one biomarker in two groups', () => {
+  test.each([
+    ['ammonia', 'ammonia_ppb', { kind: 'covariate', name: 'group' }, ['A', 'B']],
+    ['acetone', 'isoprene_ppb', { kind: 'sex' }, ['F', 'M']],
+  ])('of %s differs as R says (%s)', async (key, name, by, groups) => {
+    const { body } = await ammonia.run(independent(key, by, groups))
+    const expected = breathAmmoniaReference<{
+      auc1: number
+      auc2: number
+      difference: number
+      d_statistic: number
+      df: number
+      p_t: number
+    }>(name, 'unpaired_auc_difference')
+    const [one] = body.result.comparisons
+    const areas = body.result.curves.map(
+      (each: { area: { estimate: number } }) => each.area.estimate,
+    )
+    expect(areas[0]).toBeCloseTo(expected.auc1, 12)
+    expect(areas[1]).toBeCloseTo(expected.auc2, 12)
+    expect(one.statistic).toBeCloseTo(expected.d_statistic, 9)
+    expect(one.degreesOfFreedom).toBeCloseTo(expected.df, 6)
+    expect(one.p).toBeCloseTo(expected.p_t, 9)
+  })
+
+  test('needs both groups to be there', async () => {
+    const answer = await ammonia.run(independent('ammonia', { kind: 'sex' }, ['F', 'X']))
+    expect([answer.status, answer.body.code]).toEqual([422, 'statistics-refused'])
+  })
+})
+
+const panel = (more: object = {}) => ({
+  kind: 'panel',
+  analyteKeys: ['ammonia', 'acetone'],
+  scale: 'raw',
+  sessionRule: 'first',
+  confidence: 0.95,
+  validation: 'bootstrap',
+  resampling: { seed: 1, replicates: 200 },
+  ...more,
+})
+
+describe('a panel of gases', () => {
+  test('carries its corrected area, by bootstrap and by cross-validation, below the apparent one', async () => {
+    const bootstrap = await ammonia.runLong(panel())
+    const folds = await ammonia.runLong(
+      panel({
+        validation: 'crossValidation',
+        scale: 'log',
+        resampling: { seed: 1, replicates: 100 },
+      }),
+    )
+    for (const { result, headline } of [bootstrap, folds]) {
+      expect(result.area.estimate).toBeLessThan(result.area.apparent)
+      expect(headline).toMatchObject({ label: 'Corrected area', estimate: result.area.estimate })
+    }
+    expect(folds.result.terms.map((each: { term: string }) => each.term)).toEqual([
+      '(Intercept)',
+      'ln Ammonia',
+      'ln Acetone',
+    ])
+  })
+
+  test('hides net benefit where subjects were sampled by outcome', async () => {
+    const byOutcome = { ...inventedProtocol, sampling: 'byOutcome' as const }
+    const { runLong } = await lockedStudy(api, breathAmmonia(), byOutcome)
+    const { result } = await runLong(panel())
+    expect(result.netBenefit).toBeNull()
+    expect(result.netBenefitHidden).toContain('chosen by outcome')
+  })
+
+  test('of gases that say the same ends with the advice to leave one out', async () => {
+    const doubled = breathAmmonia().map((each): GivenSubject => {
+      const { value } = each.sessions![0]!.sensor!.ammonia as { value: number }
+      return { ...each, sessions: [{ sensor: { ammonia: value, acetone: 2 * value } }] }
+    })
+    const { ask, runs } = await lockedStudy(api, doubled)
+    await ask(panel()).expect(202)
+    await api.runJobs()
+    expect((await runs())[0].failure).toContain('Leave one of the analytes')
+  })
+
+  const asah = 'reference/results/model-asah.json'
+  test.skipIf(!hasReference(asah))(
+    's100b and ndka in 113 patients: R’s coefficients, Brier score and net benefit [skipped where the data set is absent]',
+    async () => {
+      const { runLong } = await lockedStudy(api, asahSubjects())
+      const { result } = await runLong(panel())
+      const r = <T>(quantity: string) => referenceValue<T>(asah, 's100b + ndka', quantity)
+      const terms =
+        r<{ estimate: number; se: number; odds_ratio: number; or_upper: number }[]>(
+          'logistic_coefficients',
+        )
+      for (const [at, expected] of terms.entries()) {
+        const found = result.terms[at]
+        expect(found.estimate / expected.estimate).toBeCloseTo(1, 6)
+        expect(found.standardError / expected.se).toBeCloseTo(1, 6)
+        expect(found.oddsRatioUpper / expected.or_upper).toBeCloseTo(1, 5)
+      }
+      const brier = r<{ brier: number; scaled: number }>('brier')
+      expect(result.brier.brier).toBeCloseTo(brier.brier, 7)
+      expect(result.area.apparent).toBeCloseTo(r<{ auc: number }>('auc_fitted').auc, 9)
+      const benefits = r<{ threshold: number; net_benefit: number }[]>('net_benefit')
+      for (const expected of benefits) {
+        const found = result.netBenefit.find(
+          (each: { threshold: number }) => Math.abs(each.threshold - expected.threshold) < 1e-9,
+        )
+        if (found) expect(found.netBenefit).toBeCloseTo(expected.net_benefit, 7)
+      }
+      expect(result.netBenefit.length).toBeGreaterThan(4)
+    },
+  )
+})
