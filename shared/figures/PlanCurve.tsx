@@ -6,7 +6,7 @@ import { FigureKey, type KeyEntry, keyHeight } from './FigureKey.tsx'
 import { type Box, figureNumber as n, type Point, widthOf } from './figureGeometry.ts'
 import { type FigureTheme, figureThemes } from './figureTheme.ts'
 import { marksPath } from './markPaths.ts'
-import { PlanMark } from './PlanMark.tsx'
+import { PointMark } from './PointMark.tsx'
 import type { PlanCurveAxis, PlanCurveData } from './planCurveTypes.ts'
 import { roundTicks } from './roundTicks.ts'
 import { marksAlong, SERIES_STYLE } from './seriesStyle.ts'
@@ -62,7 +62,7 @@ export function PlanCurve({ id, curve, width = 470, theme = figureThemes.light }
           <PlanLine key={curve.lines[at]!.label} parts={lines[at]!} at={at} theme={theme} />
         ))}
       {curve.mark && (
-        <PlanMark
+        <PointMark
           at={{ x: x(curve.mark.x), y: y(curve.mark.y) }}
           label={curve.mark.label}
           plot={plot}

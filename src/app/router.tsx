@@ -15,6 +15,8 @@ const PLAIN_PAGES: RouteObject[] = [
   { path: 'studies/new', lazy: page(() => import('../pages/NewStudyPage.tsx')) },
   { path: 'planning', lazy: page(() => import('../pages/PlanningPage.tsx')) },
   { path: 'planning/:part', lazy: page(() => import('../pages/PlanningPage.tsx')) },
+  { path: 'sensor', lazy: page(() => import('../pages/SensorPage.tsx')) },
+  { path: 'sensor/:part', lazy: page(() => import('../pages/SensorPage.tsx')) },
 ]
 
 /** Pages of a study; the first part of the path names its station. */

@@ -1,4 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
+import { Link } from 'react-router-dom'
 import { permitsInstallation } from '#shared/policy/permits.ts'
 import { CAUTIONS } from '#shared/terms/cautions.ts'
 import { formatCount } from '#shared/terms/numbers.ts'
@@ -54,6 +55,23 @@ export default function StudiesPage() {
             </EmptyPlace>
           }
         />
+        <section aria-labelledby="tools" className="mt-7 border-t border-rule pt-5">
+          <h2 id="tools">Tools</h2>
+          <ul className="flex flex-wrap gap-x-10 gap-y-3">
+            <li className="max-w-[38ch]">
+              <Link to="/planning">Plan a study</Link>
+              <p className="text-sm text-ink-2">
+                Sample sizes, power, and what sensor noise costs. Stores nothing.
+              </p>
+            </li>
+            <li className="max-w-[38ch]">
+              <Link to="/sensor">Characterise a sensor</Link>
+              <p className="text-sm text-ink-2">
+                Calibration, limits, noise over time, uncertainty. Stores nothing.
+              </p>
+            </li>
+          </ul>
+        </section>
       </Sheet>
     </>
   )

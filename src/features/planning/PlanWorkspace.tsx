@@ -1,10 +1,9 @@
 import { useState } from 'react'
 import { useSearchParams } from 'react-router-dom'
 import { CAUTIONS } from '#shared/terms/cautions.ts'
-import { Button } from '../../ui/Button.tsx'
+import { BesideProgress } from '../../ui/BesideProgress.tsx'
 import { Facts } from '../../ui/Facts.tsx'
 import { Notice } from '../../ui/Notice.tsx'
-import { Progress } from '../../ui/Progress.tsx'
 import { PlanAnswerTable, PlanAnswerView } from './PlanAnswerView.tsx'
 import { PlanCurvePanel } from './PlanCurvePanel.tsx'
 import { PlanEntriesForm } from './PlanEntriesForm.tsx'
@@ -80,17 +79,7 @@ function Worked({ work, provenance }: { work: PlanWork; provenance: readonly str
 }
 
 function NotWorked({ state }: { state: PlanState }) {
-  if ('share' in state)
-    return <Progress label="Searching the numbers" fraction={state.share} onCancel={state.cancel} />
-  if ('stopped' in state)
-    return (
-      <Notice title="Not computed">
-        <p className="mb-2">{state.stopped} Nothing was changed.</p>
-        <Button kind="quiet" size="small" onClick={state.again}>
-          Compute again
-        </Button>
-      </Notice>
-    )
+  if ('beside' in state) return <BesideProgress label="Searching the numbers" work={state.beside} />
   return (
     <Notice tone="warn" title="No answer yet">
       Mend the numbers that are marked on this page.

@@ -5,7 +5,7 @@ import { placeLabel } from './placeLabel.ts'
 import { textWidth } from './textWidth.ts'
 
 /** A point of a line that matters, with the way to both axes and its number. In ink: copper is for cut-offs. */
-export function PlanMark(props: {
+export function PointMark(props: {
   at: Point
   label: string
   plot: Box
