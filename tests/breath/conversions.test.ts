@@ -1,5 +1,6 @@
-import { test } from 'vitest'
+import { expect, test } from 'vitest'
 import { btpsFactor } from '#shared/breath/conversions/btpsFactor.ts'
+import { calibratedPpb } from '#shared/breath/conversions/calibratedPpb.ts'
 import { detunedResponse } from '#shared/breath/conversions/detunedResponse.ts'
 import { detuningForLossHz } from '#shared/breath/conversions/detuningForLossHz.ts'
 import { dilutionCorrectedPpb } from '#shared/breath/conversions/dilutionCorrectedPpb.ts'
@@ -129,3 +130,38 @@ test.each([...gases, ...humidity, ...readings, ...sensor])(
   '%s comes out to six figures',
   (_what, value, expected) => expectSixFigures(value, expected),
 )
+
+test('the pressure between 98.0 and 104.3 kPa changes the BTPS factor by at most 0.16 %', () => {
+  // Johns 2004 (from memory).
+  const standard = btpsFactor(20, SATURATED(20))
+  for (const pressureKpa of [98, 104.3]) {
+    const change = btpsFactor(20, SATURATED(20), pressureKpa) / standard - 1
+    expect(Math.abs(change)).toBeLessThanOrEqual(0.0016)
+    expect(Math.abs(change)).toBeGreaterThan(0.0005)
+  }
+})
+
+test('30 to 45 mmHg are 3.95 to 5.92 % of humid and 4.21 to 6.31 % of dry gas', () => {
+  expect(humidPercentOfMmHg(30)).toBeCloseTo(3.95, 2)
+  expect(humidPercentOfMmHg(45)).toBeCloseTo(5.92, 2)
+  expect(dryPercentOfMmHg(30)).toBeCloseTo(4.21, 2)
+  expect(dryPercentOfMmHg(45)).toBeCloseTo(6.31, 2)
+})
+
+test('a mass concentration goes back to its mixing ratio', () => {
+  const ugM3 = massConcentrationUgM3(123.4, MOLAR_MASS.acetone, 21, 99)
+  expect(mixingRatioPpb(ugM3, MOLAR_MASS.acetone, 21, 99)).toBeCloseTo(123.4, 10)
+})
+
+test('a signal of 0.9 on a line of 0.1 + 0.002 per ppb stands for 400 ppb, corrected by 2 % for 408', () => {
+  expect(calibratedPpb(0.9, { zero: 0.1, slopePerPpb: 0.002 })).toBeCloseTo(400, 10)
+  expect(calibratedPpb(0.9, { zero: 0.1, slopePerPpb: 0.002, correction: 1.02 })).toBeCloseTo(
+    408,
+    10,
+  )
+})
+
+test('the loss at a detuning and the detuning for a loss undo each other', () => {
+  const detuningHz = detuningForLossHz(7, 32_768, 1.2e4)
+  expect(detunedResponse(detuningHz, 32_768, 1.2e4)).toBeCloseTo(0.93, 12)
+})

@@ -35,7 +35,7 @@ const decimal = fc
   .map((parts) => parts.join(''))
 
 test('a plain decimal of any length reads as Number() reads it', () => {
-  fc.assert(
+  void fc.assert(
     fc.property(decimal, (text) => {
       expect(Object.is(numberOf(text), Number(text))).toBe(true)
     }),
@@ -44,7 +44,7 @@ test('a plain decimal of any length reads as Number() reads it', () => {
 })
 
 test('every double that prints as a plain decimal reads back as itself', () => {
-  fc.assert(
+  void fc.assert(
     fc.property(fc.double({ noNaN: true, noDefaultInfinity: true }), (value) => {
       expect(numberOf(String(value))).toBe(Number(String(value)))
     }),
@@ -55,7 +55,7 @@ test('every double that prints as a plain decimal reads back as itself', () => {
 test('whatever is no plain decimal is not a number, and whatever is one is', () => {
   const plain = /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/
   const pieces = fc.constantFrom('0', '7', '12', '.', '-', '+', 'e', 'E', 'x', ' ', ',', 'Infinity')
-  fc.assert(
+  void fc.assert(
     fc.property(fc.array(pieces, { maxLength: 6 }), (parts) => {
       const text = parts.join('')
       expect(Number.isNaN(numberOf(text))).toBe(!plain.test(text))
@@ -92,7 +92,7 @@ test('a line of short decimals reads the quick way as Number() reads its cells',
       const whole = all.slice(0, all.length - decimals)
       return `${isNegative ? '-' : ''}${whole}${decimals ? `.${all.slice(all.length - decimals)}` : ''}`
     })
-  fc.assert(
+  void fc.assert(
     fc.property(
       fc.array(cell, { minLength: 1, maxLength: 9 }),
       fc.constantFrom('\n', '\r\n'),

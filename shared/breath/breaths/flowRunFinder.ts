@@ -79,7 +79,14 @@ function runOf(
   }
 }
 
-/** From the run's mean temperature and humidity; saturated where humidity is not recorded. */
+/** The saturation pressure's formula holds between these (WMO-No. 8, from memory). */
+const COLDEST_C = -45
+const WARMEST_C = 60
+
+/**
+ * From the run's mean temperature and humidity; saturated where humidity is not recorded. Null where
+ * temperature is not recorded, or where either cannot be.
+ */
 function factorOf(
   { temperatureC, humidityPercent }: TraceColumns,
   from: number,
@@ -89,6 +96,7 @@ function factorOf(
   if (!temperatureC) return null
   const meanC = meanOf(temperatureC, from, to)
   const share = humidityPercent ? meanOf(humidityPercent, from, to) / 100 : 1
+  if (!(meanC >= COLDEST_C && meanC <= WARMEST_C && share >= 0)) return null
   const factor = btpsFactor(meanC, share * saturationPressureKpa(meanC), pressureKpa)
   return factor > 0 ? finiteOrNull(factor) : null
 }

@@ -19,14 +19,16 @@ export function windowFigures(
 ): WindowFigures | null {
   const n = to - from
   if (n < 1) return null
+  // Both as differences from the first sample: a channel that stands still has its own value as mean,
+  // and instants since 1970 do not cost the slope its digits.
+  const firstValue = values[from]!
   let valueSum = 0
   let timeSum = 0
-  // Times since the first sample: instants since 1970 would cost the slope its digits.
   for (let i = from; i < to; i++) {
-    valueSum += values[i]!
+    valueSum += values[i]! - firstValue
     timeSum += timeS[i]! - timeS[from]!
   }
-  const mean = valueSum / n
+  const mean = firstValue + valueSum / n
   const meanTime = timeSum / n
   let squares = 0
   let products = 0
