@@ -8,6 +8,7 @@ import { auditedAs, auditedFields } from './audited.ts'
 import type { FieldChange, Happening } from './auditTrail.ts'
 import type { Change } from './change.ts'
 import { canonicalJson } from './hash.ts'
+import { insertMany } from './insertMany.ts'
 import { PASSING_TABLES, type PassingTable } from './passing.ts'
 import type { Allowed } from './targets.ts'
 
@@ -25,6 +26,7 @@ export type CompoundRecord = {
   rows: (readonly [table: RecordTable, row: Row, name?: string])[]
 }
 
+/** Rows between two words on progress. */
 const ROWS_AT_A_TIME = 500
 
 /** What a change may do. Each write notes for the audit trail what it did. */
@@ -64,13 +66,12 @@ export class ChangeTx {
       const byTable = new Map<RecordTable, Row[]>()
       for (const { rows } of part)
         for (const [table, row] of rows) byTable.set(table, [...(byTable.get(table) ?? []), row])
-      for (const [table, rows] of byTable)
-        await this.#database.insert(table).values(rows as never[])
-      for (const record of part)
+      for (const [table, rows] of byTable) await insertMany(this.#database, table, rows as never[])
+      for (const { rows, ...record } of part)
         this.happenings.push({
           ...record,
           event: this.#event,
-          fields: record.rows.flatMap(([table, row, name = auditedAs(table).record]) =>
+          fields: rows.flatMap(([table, row, name = auditedAs(table).record]) =>
             newValues(table, row).map((change) => ({
               ...change,
               field: `${name}.${change.field}`,
@@ -134,14 +135,12 @@ export class ChangeTx {
   /** Inserts rows that are not records (pieces of files, jobs, mails); the trail does not list them. */
   async put<T extends PassingTable>(table: T, rows: T['$inferInsert'][]): Promise<void> {
     if (!PASSING_TABLES.includes(table)) throw new Error(`${getTableName(table)} is audited.`)
-    for (let from = 0; from < rows.length; from += ROWS_AT_A_TIME)
-      await this.#database.insert(table).values(rows.slice(from, from + ROWS_AT_A_TIME) as never[])
+    await insertMany(this.#database, table, rows)
   }
 
   /** Frozen rows of a dataset: the manifest's hash stands for them in the trail. */
   async freeze<T extends MySqlTable>(table: T, rows: T['$inferInsert'][]): Promise<void> {
-    for (let from = 0; from < rows.length; from += ROWS_AT_A_TIME)
-      await this.#database.insert(table).values(rows.slice(from, from + ROWS_AT_A_TIME) as never[])
+    await insertMany(this.#database, table, rows)
   }
 
   /** The database for statements on passing tables beyond put(). */

@@ -8,6 +8,7 @@ import { INFORMATION_CLASSES, type InformationClass } from '#shared/policy/infor
 import type { Membership } from '#shared/policy/people.ts'
 import type { Actor } from './actor.ts'
 import { canonicalJson, sha256Hex } from './hash.ts'
+import { insertMany } from './insertMany.ts'
 
 export type FieldChange = {
   field: string
@@ -40,8 +41,6 @@ export type Circumstance = {
 type EventRow = typeof auditEvents.$inferInsert
 type ValueRow = typeof auditValues.$inferInsert
 
-const ROWS_AT_A_TIME = 1000
-
 /** SHA-256(salt ‖ value): tells nothing without the salt, proves the value with it. */
 export const valueDigest = (salt: string, value: string): string => sha256Hex(salt + value)
 
@@ -56,7 +55,7 @@ export function eventHash(event: EventRow): string {
  * moves the head. The last thing that a transaction does, since every write waits here for its turn.
  */
 export async function appendEvents(
-  tx: Pick<Database, 'insert' | 'update' | 'execute'>,
+  tx: Pick<Database, 'update' | 'execute'>,
   chainId: string,
   happenings: readonly Happening[],
   circumstance: Circumstance,
@@ -82,10 +81,8 @@ export async function appendEvents(
     events.push(event)
     values.push(...salted.map((each) => each.row))
   }
-  for (let from = 0; from < events.length; from += ROWS_AT_A_TIME)
-    await tx.insert(auditEvents).values(events.slice(from, from + ROWS_AT_A_TIME))
-  for (let from = 0; from < values.length; from += ROWS_AT_A_TIME)
-    await tx.insert(auditValues).values(values.slice(from, from + ROWS_AT_A_TIME))
+  await insertMany(tx, auditEvents, events)
+  await insertMany(tx, auditValues, values)
   await tx
     .update(auditChains)
     .set({ count: position, headHash: previousHash })

@@ -93,6 +93,16 @@ export async function reportProgress(
   return row?.cancelRequested ?? false
 }
 
+/** Keeps a job from being taken for abandoned. */
+export async function holdJob(jobId: string): Promise<void> {
+  await writePassing((tx) =>
+    tx
+      .update(jobs)
+      .set({ heldUntil: new Date(Date.now() + HOLD_MS) })
+      .where(eq(jobs.id, jobId)),
+  )
+}
+
 export async function finishJob(
   jobId: string,
   end: { state: 'done' | 'failed' | 'cancelled'; failure?: string },

@@ -2,7 +2,7 @@ import { setTimeout as wait } from 'node:timers/promises'
 import type { Actor } from '#server/changes/actor.ts'
 import { AppError } from '#shared/errors/AppError.ts'
 import type { JobKind } from '#shared/terms/job.ts'
-import { claimJob, finishJob, type JobRow, reportProgress } from './queue.ts'
+import { claimJob, finishJob, holdJob, type JobRow, reportProgress } from './queue.ts'
 
 export type JobContext = {
   job: JobRow
@@ -23,6 +23,7 @@ export type JobHandlers = Record<JobKind, JobHandler>
 export class JobCancelled extends Error {}
 
 const IDLE_WAIT_MS = 250
+const BEAT_MS = 15_000
 
 /** Works on jobs until the signal says stop; a job under way is finished first. */
 export async function workOnJobs(handlers: JobHandlers, signal: AbortSignal): Promise<void> {
@@ -50,6 +51,8 @@ export async function runNextJob(handlers: JobHandlers): Promise<boolean> {
       if (await reportProgress(job.id, { done, total, words })) throw new JobCancelled()
     },
   }
+  // Long steps without a word on progress, such as the trail of a large import, show life all the same.
+  const beat = setInterval(() => void holdJob(job.id).catch(() => undefined), BEAT_MS)
   try {
     await handler.run(context)
     await finishJob(job.id, { state: 'done' })
@@ -59,6 +62,8 @@ export async function runNextJob(handlers: JobHandlers): Promise<boolean> {
       end === 'cancelled' ? 'Stopped on request. Nothing was changed.' : failureWords(error, job)
     await handler.ended(context, end, words)
     await finishJob(job.id, { state: end, failure: words.slice(0, 500) })
+  } finally {
+    clearInterval(beat)
   }
   return true
 }
