@@ -1,4 +1,5 @@
 import { analysisRoutes } from './features/analyses/analyses.routes.ts'
+import { precisionRoutes } from './features/analyses/precision.routes.ts'
 import { analyteRoutes } from './features/analytes/analytes.routes.ts'
 import { auditEventRoutes } from './features/auditEvents/auditEvents.routes.ts'
 import { datasetRoutes } from './features/datasets/datasets.routes.ts'
@@ -19,6 +20,7 @@ import type { Route } from './http/route.ts'
 /** Every route of the API. The permission test walks this list. */
 export const ROUTES: readonly Route[] = [
   ...analysisRoutes,
+  ...precisionRoutes,
   ...auditEventRoutes,
   ...meRoutes,
   ...analyteRoutes,

@@ -20,12 +20,12 @@ const texts = (part: Part, decimals: number): [string, string] => {
   return [estimate, interval]
 }
 
-/** Lines of the sensor on the reference with their intervals. @param sd of the differences */
+/** Lines of the sensor on the reference with their intervals. */
 export function fittedLinesTable(
-  { lines }: MethodComparison,
-  at: { unit: string; sd: number; confidence: number; errorVarianceRatio: number },
+  { lines, sd }: MethodComparison,
+  at: { unit: string; confidence: number; errorVarianceRatio: number },
 ): ResultTable {
-  const decimals = agreementDecimals(at.sd)
+  const decimals = agreementDecimals(sd)
   return {
     caption: 'Lines of the sensor on the reference',
     columns: [
@@ -77,11 +77,11 @@ export function correlationsTable(
 
 /** Bias at the levels that the analyst asked for; null where none was. */
 export function levelsTable(
-  { levels }: MethodComparison,
-  at: { unit: string; sd: number; confidence: number },
+  { levels, sd }: MethodComparison,
+  at: { unit: string; confidence: number },
 ): ResultTable | null {
   if (levels.length === 0) return null
-  const decimals = agreementDecimals(at.sd)
+  const decimals = agreementDecimals(sd)
   const inUnit = at.unit ? ` (${at.unit})` : ''
   return {
     caption: 'Bias at decision levels',

@@ -8,6 +8,7 @@ import { ordinaryRegression } from '#shared/statistics/agreement/ordinaryRegress
 import { passingBablokRegression } from '#shared/statistics/agreement/passingBablokRegression.ts'
 import { pearson } from '#shared/statistics/agreement/pearson.ts'
 import { spearman } from '#shared/statistics/agreement/spearman.ts'
+import { moments } from '#shared/statistics/description/moments.ts'
 import { StatisticsError } from '#shared/statistics/StatisticsError.ts'
 import type { FittedLine } from '#shared/terms/agreementTerms.ts'
 import type { Pairs } from './agreementLimitsOf.ts'
@@ -47,6 +48,7 @@ export function methodComparisonOf(pairs: Pairs, at: At): MethodComparison {
       }),
     ],
     levels: levelsOf(pairs, at),
+    sd: moments(y.map((value, at) => value - x[at]!)).sd,
     concordance: estimateOf(AGREEMENT_METHODS.lin.name, () => {
       const { estimate, interval } = linConcordance(pairs, { level })
       return { estimate, interval }

@@ -1,4 +1,5 @@
 import type { AgreementFigures, AgreementLineFigures } from '#shared/schemas/agreement.ts'
+import { formatCount } from '#shared/terms/numbers.ts'
 import type { AgreementPairs } from './agreementPairs.ts'
 import { plottedDifference } from './plottedDifference.ts'
 
@@ -35,3 +36,23 @@ export const heightAt = (
   centre: number | null,
   mean: number,
 ): number => estimate + slope * (mean - (centre ?? mean))
+
+/** So many codes are named in a sentence. */
+const MOST_NAMED = 20
+
+/** Who lies outside the limits, by code, as a sentence. */
+export function outsideWords(
+  pairs: Omit<AgreementPairs, 'counts'>,
+  figures: AgreementFigures,
+): string {
+  const outside = outsideLimits(pairs, figures)
+  const many = `${formatCount(outside.length)} of ${formatCount(pairs.sensor.length)} pairs`
+  if (outside.length === 0) return 'No pair lies outside the limits.'
+  const codes = [...new Set(outside.map(({ subject }) => subject))]
+  const named = codes.slice(0, MOST_NAMED).join(', ')
+  const more = codes.length - MOST_NAMED
+  return `Outside the limits: ${many}, of ${named}${more > 0 ? ` and ${formatCount(more)} more` : ''}. ${LOOK}`
+}
+
+/** What to make of pairs outside the limits. */
+export const LOOK = 'Look at where each comes from; a value is not wrong because it lies outside.'

@@ -128,15 +128,18 @@ interface NamedLine extends KeyEntry {
   line: AgreementLine
 }
 
+const BIAS_AND_LIMITS = { upper: 'Upper limit', middle: 'Bias', lower: 'Lower limit' }
+
 /** The lines of the plot from the top down, as they are drawn and named. */
 function namedLines(props: DifferencePlotData, theme: FigureTheme): NamedLine[] {
   const { bias, lowerLimit, upperLimit, acceptance } = props
   const limit = { colour: theme.ink, dash: '7 4', strokeWidth: 1.5 }
   const agreed = { colour: theme.series[1], dash: '12 3 2 3', strokeWidth: 1.6 }
+  const names = props.lineNames ?? BIAS_AND_LIMITS
   const lines: NamedLine[] = [
-    { label: 'Upper limit', value: words(upperLimit), line: upperLimit, ...limit },
-    { label: 'Bias', value: words(bias), line: bias, colour: theme.ink, strokeWidth: 1.8 },
-    { label: 'Lower limit', value: words(lowerLimit), line: lowerLimit, ...limit },
+    { label: names.upper, value: words(upperLimit), line: upperLimit, ...limit },
+    { label: names.middle, value: words(bias), line: bias, colour: theme.ink, strokeWidth: 1.8 },
+    { label: names.lower, value: words(lowerLimit), line: lowerLimit, ...limit },
   ]
   if (!acceptance) return lines
   const accepted = (label: string, intercept: number): NamedLine => ({

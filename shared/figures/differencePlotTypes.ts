@@ -25,4 +25,6 @@ export interface DifferencePlotData {
   unit: string
   /** Unit of the difference where it is another, such as % of the mean. */
   differenceUnit?: string
+  /** What the lines are called where they are not bias and limits of agreement. */
+  lineNames?: { upper: string; middle: string; lower: string }
 }

@@ -64,6 +64,8 @@ export const methodComparison = z.object({
     }),
   ),
   levels: z.array(plainLine.extend({ level: z.number(), percent: bound })),
+  /** SD of the differences, in the analyte's unit. */
+  sd: z.number(),
   concordance: estimate,
   pearson: estimate,
   spearman: estimate,

@@ -132,3 +132,16 @@ export const datasetPairs = z.object({
   caution,
 })
 export type DatasetPairs = z.infer<typeof datasetPairs>
+
+/** What subjects can be divided by: the groups that are there, each with how many subjects. */
+export const datasetGroups = z.array(
+  z.object({
+    by: z.discriminatedUnion('kind', [
+      z.object({ kind: z.literal('site') }),
+      z.object({ kind: z.literal('sex') }),
+      z.object({ kind: z.literal('covariate'), name: z.string() }),
+    ]),
+    groups: z.array(z.object({ group: z.string(), subjects: count })),
+  }),
+)
+export type DatasetGroups = z.infer<typeof datasetGroups>

@@ -175,7 +175,7 @@ describe('a report', () => {
       ['Lower limit', result.lowerLimit],
     ] as const)
       expect(text).toContain(
-        `${label} ${plain(line.estimate, 1)} ${plain(line.lower, 1)} to ${plain(line.upper, 1)}`,
+        `${label} ${plain(line.estimate, 1)} ${plain(line.lower!, 1)} to ${plain(line.upper!, 1)}`,
       )
     expect(text).toContain('Acceptable: −100 to 100 ppb.')
   })

@@ -3,10 +3,13 @@ import { reader } from '#db/client.ts'
 import { route } from '#server/http/route.ts'
 import { accuracyValues } from '#shared/analyses/accuracyValues.ts'
 import { agreementPairs } from '#shared/analyses/agreementPairs.ts'
+import { groupsOf } from '#shared/analyses/groupsOf.ts'
 import { id } from '#shared/schemas/common.ts'
 import {
   dataset,
+  datasetGroups,
   datasetPairs,
+  datasetPairsQuery,
   datasetSummary,
   datasetValues,
   datasetValuesQuery,
@@ -61,18 +64,33 @@ export const datasetRoutes = [
     ...ofDataset,
     method: 'get',
     path: '/api/datasets/:datasetId/pairs',
-    query: datasetValuesQuery,
+    query: datasetPairsQuery,
     returns: datasetPairs,
     handle: async ({ params, query }) => {
       const { manifest, protocol } = await getDataset(reader(), params.datasetId)
-      const { unit } = frozenAnalyte(manifest, query.analyteKey, 'analyteKey')
+      const { analyteKey, sessionRule, referenceKey = analyteKey } = query
+      const { unit } = frozenAnalyte(manifest, analyteKey, 'analyteKey')
+      const { unit: referenceUnit } = frozenAnalyte(manifest, referenceKey, 'referenceKey')
       const rows = await readDatasetRows(reader(), params.datasetId)
       return {
-        ...query,
+        analyteKey,
+        sessionRule,
+        referenceKey,
         unit,
-        ...agreementPairs(rows, query.analyteKey, query.sessionRule),
+        referenceUnit,
+        ...agreementPairs(rows, analyteKey, sessionRule, referenceKey),
         caution: CAUTIONS[protocol.regulatoryStatus],
       }
+    },
+  }),
+  route({
+    ...ofDataset,
+    method: 'get',
+    path: '/api/datasets/:datasetId/groups',
+    returns: datasetGroups,
+    handle: async ({ params }) => {
+      await getDataset(reader(), params.datasetId)
+      return groupsOf(await readDatasetRows(reader(), params.datasetId))
     },
   }),
 ]

@@ -9,7 +9,8 @@ import {
 } from '#shared/analyses/comparisonTables.ts'
 import { differencePlotOf } from '#shared/analyses/differencePlotOf.ts'
 import { outsideWords } from '#shared/analyses/outsideLimits.ts'
-import { scatterFitOf } from '#shared/analyses/scatterFitOf.ts'
+import { residualPlotOf } from '#shared/analyses/residualPlotOf.ts'
+import { type ScatterFit, scatterFitOf } from '#shared/analyses/scatterFitOf.ts'
 import { DifferencePlot } from '#shared/figures/DifferencePlot.tsx'
 import { ScatterIdentity } from '#shared/figures/ScatterIdentity.tsx'
 import type { AgreementParameters, AgreementResult } from '#shared/schemas/agreement.ts'
@@ -90,12 +91,7 @@ function comparisonBlocks({ pairs, parameters, result }: Of, number: number): Re
   const unit = unitLabel(result.unit)
   const { confidence, errorVarianceRatio } = parameters
   const fit = scatterFitOf(comparison, 'deming')
-  const at = {
-    unit,
-    confidence,
-    errorVarianceRatio,
-    sd: result.scale === 'ratio' || result.scale === 'percent' ? spreadOf(pairs) : result.sd,
-  }
+  const at = { unit, confidence, errorVarianceRatio }
   return [
     {
       kind: 'figure',
@@ -110,8 +106,23 @@ function comparisonBlocks({ pairs, parameters, result }: Of, number: number): Re
         />
       ),
     },
+    ...(fit ? [residualBlock(pairs, fit, unit, number)] : []),
     ...resultTableBlocks(fittedLinesTable(comparison, at)),
     ...resultTableBlocks(levelsTable(comparison, at)),
     ...resultTableBlocks(correlationsTable(comparison, confidence)),
   ]
 }
+
+const residualBlock = (
+  pairs: AgreementPairs,
+  fit: ScatterFit,
+  unit: string,
+  number: number,
+): ReportBlock => ({
+  kind: 'figure',
+  share: 0.8,
+  caption: `Residuals of the ${fit.label} line against the reference.`,
+  figure: (
+    <DifferencePlot id={`analysis-${number}-residuals`} {...residualPlotOf(pairs, fit, unit)} />
+  ),
+})

@@ -19,7 +19,7 @@ export function analysisFacts(source: ReportSource, analysis: StoredAnalysis): R
       pairs: [
         { label: 'Standing', value: standingOf(source, badge) },
         { label: 'Measured', value: result.analyteName },
-        { label: 'Sessions', value: SESSION_RULE_LABELS[parameters.sessionRule] },
+        ...sessionsOf(parameters),
         { label: 'Counted', value: countedInWords(result) },
         ...belowLodOf(result.counts.belowLod),
         ...provenanceOf(source, analysis),
@@ -38,6 +38,12 @@ export function analysisFacts(source: ReportSource, analysis: StoredAnalysis): R
   ]
 }
 
+/** Which sessions went in; precision looks at all of them. */
+const sessionsOf = (parameters: StoredAnalysis['parameters']): ReportPair[] =>
+  'sessionRule' in parameters
+    ? [{ label: 'Sessions', value: SESSION_RULE_LABELS[parameters.sessionRule] }]
+    : []
+
 /** Planned or exploratory, and why. */
 export function standingOf({ study }: ReportSource, badge: StoredAnalysis['badge']): string {
   return study.kind === 'earlierData' && badge === 'exploratory'
@@ -54,7 +60,8 @@ export function countedInWords(result: StoredAnalysis['result']): string {
     return `${formatCount(counted)} of ${formatCount(subjects)} subjects: ${formatCount(present)} present, ${formatCount(absent)} absent${several}`
   }
   const { counted, subjects, pairs } = result.counts
-  return `${formatCount(counted)} of ${formatCount(subjects)} subjects, ${formatCount(pairs)} pairs`
+  const what = result.kind === 'precision' ? 'readings' : 'pairs'
+  return `${formatCount(counted)} of ${formatCount(subjects)} subjects, ${formatCount(pairs)} ${what}`
 }
 
 const belowLodOf = (values: number): ReportPair[] =>

@@ -1,6 +1,8 @@
 import type { ReportBlock, ReportDocument, ReportSection } from '#server/reports/reportDocument.ts'
 import { headlineOf } from '#shared/analyses/headlineOf.ts'
+import type { AgreementResult } from '#shared/schemas/agreement.ts'
 import type { AnalysisResult } from '#shared/schemas/analysis.ts'
+import { AGREEMENT_METHODS } from '#shared/statistics/agreement/AGREEMENT_METHODS.ts'
 import { METHODS } from '#shared/statistics/METHODS.ts'
 import { ANALYSIS_BADGE_LABELS, ANALYSIS_KIND_LABELS } from '#shared/terms/analysis.ts'
 import { headlineTexts } from '#shared/terms/resultText.ts'
@@ -9,7 +11,9 @@ import { accuracyBlocks } from './accuracyBlocks.tsx'
 import { agreementBlocks } from './agreementBlocks.tsx'
 import { analysisFacts, countedInWords } from './analysisFacts.ts'
 import { comparisonBlocks } from './comparisonBlocks.tsx'
+import { correlationBlocks } from './correlationBlocks.ts'
 import { panelBlocks } from './panelBlocks.tsx'
+import { precisionBlocks } from './precisionBlocks.ts'
 import { reportFrame, shownOfRun } from './reportFrame.ts'
 
 const NEW_PAGE: ReportBlock = { kind: 'pageBreak' }
@@ -60,7 +64,16 @@ function summarySection(source: ReportSource): ReportSection {
   }
 }
 
-const NO_PARTS = { area: null, bias: null, difference: null, sd: null, unit: null }
+const NO_PARTS = {
+  area: null,
+  bias: null,
+  difference: null,
+  rankCorrelation: null,
+  withinSubjectSd: null,
+  scale: null,
+  sd: null,
+  unit: null,
+}
 
 function headlineText(result: AnalysisResult): string {
   const { figure, interval } = headlineTexts(
@@ -94,13 +107,17 @@ function resultBlocks(source: ReportSource, analysis: StoredAnalysis): ReportBlo
       return comparisonBlocks(analysis, result)
     case 'panel':
       return panelBlocks(analysis, result)
+    case 'precision':
+      return precisionBlocks(analysis, result)
+    case 'correlation':
+      return correlationBlocks(analysis, result)
   }
 }
 
 /** Name and source of every method that an interval in this part was computed by. */
 function methodsSection({ analyses }: ReportSource): ReportSection {
   const used = new Set(analyses.flatMap(({ result }) => methodNames(result)))
-  const rows = Object.values(METHODS)
+  const rows = [...Object.values(METHODS), ...Object.values(AGREEMENT_METHODS)]
     .filter(({ name }) => used.has(name))
     .map(({ name, source }) => [name, source])
   const versions = [...new Set(analyses.map((analysis) => analysis.statisticsVersion))].join(', ')
@@ -114,11 +131,21 @@ function methodsSection({ analyses }: ReportSource): ReportSection {
 }
 
 function methodNames(result: AnalysisResult): string[] {
-  if (result.kind === 'agreement') return [result.biasMethod, result.limitsMethod]
+  if (result.kind === 'agreement') return agreementMethods(result)
+  if (result.kind === 'correlation') return [result.rankCorrelation.method]
+  if (result.kind === 'precision')
+    return [result.withinSubjectSd.method, ...(result.intraclass ?? []).map((each) => each.method)]
   if (result.kind === 'comparison') return result.curves.flatMap(({ area }) => area?.method ?? [])
   if (result.kind === 'panel') return []
   return [
     ...(result.area ? [result.area.method] : []),
     ...(result.atCutOff?.measures.map((measure) => measure.method) ?? []),
   ]
+}
+
+function agreementMethods({ biasMethod, limitsMethod, comparison }: AgreementResult): string[] {
+  const drawn = comparison
+    ? [...comparison.lines, comparison.concordance, comparison.pearson, comparison.spearman]
+    : []
+  return [biasMethod, limitsMethod, ...drawn.map(({ method }) => method)]
 }

@@ -1,0 +1,1 @@
+ALTER TABLE `analyses` MODIFY COLUMN `kind` enum('accuracy','agreement','comparison','panel','precision','correlation') NOT NULL;
