@@ -37,6 +37,12 @@ const environment = z
     BREATHMARK_TRUSTED_PROXIES: z.string().regex(/^\d$/).transform(Number).default(0),
     BREATHMARK_IDLE_MINUTES: minutes.default(30),
     BREATHMARK_LOGIN_MINUTES: minutes.default(600),
+    /** Pieces of long work that this process does at once. */
+    BREATHMARK_JOB_THREADS: z
+      .string()
+      .regex(/^[1-8]$/, 'A number from 1 to 8.')
+      .transform(Number)
+      .default(2),
     /** Requests that one address may make in a minute. */
     BREATHMARK_REQUESTS_PER_MINUTE: z
       .string()

@@ -21,7 +21,7 @@ const server =
       )
     : createHttpServer(app)
 
-const thread = startThread()
+const threads = Array.from({ length: config.BREATHMARK_JOB_THREADS }, startThread)
 server.listen(config.BREATHMARK_PORT, config.BREATHMARK_HOST, () => {
   console.log(JSON.stringify({ level: 'info', event: 'listening', port: config.BREATHMARK_PORT }))
   // A parent process waits for this word.
@@ -30,19 +30,23 @@ server.listen(config.BREATHMARK_PORT, config.BREATHMARK_HOST, () => {
 
 for (const signal of ['SIGINT', 'SIGTERM'] as const) process.once(signal, () => void stop())
 
-/** Takes no new requests, lets those under way and the job under way end, then leaves. */
+/** Takes no new requests, lets those under way and the jobs under way end, then leaves. */
 async function stop(): Promise<void> {
   await new Promise((resolve) => {
     server.close(resolve)
     server.closeIdleConnections()
   })
-  thread.postMessage('stop')
-  await new Promise((resolve) => thread.once('exit', resolve))
+  await Promise.all(
+    threads.map((thread) => {
+      thread.postMessage('stop')
+      return new Promise((resolve) => thread.once('exit', resolve))
+    }),
+  )
   await disconnectDatabase()
   process.exit(0)
 }
 
-/** Long work and mail run in a thread: TypeScript in development, the bundle beside this one in production. */
+/** Long work and mail run in threads, so that nobody's work waits for another's: TypeScript in development, the bundle beside this one in production. */
 function startThread(): Worker {
   const bundled = import.meta.url.endsWith('.js')
   const worker = bundled
