@@ -38,6 +38,8 @@ const STUDY_PAGES: RouteObject[] = [
   { path: 'lock', lazy: page(() => import('../pages/LockPage.tsx')) },
   { path: 'results', lazy: page(() => import('../pages/ResultsPage.tsx')) },
   { path: 'results/explore', lazy: page(() => import('../pages/ExplorePage.tsx')) },
+  { path: 'results/compare', lazy: page(() => import('../pages/ComparePage.tsx')) },
+  { path: 'results/panel', lazy: page(() => import('../pages/PanelPage.tsx')) },
   { path: 'results/:analysisId', lazy: page(() => import('../pages/AnalysisPage.tsx')) },
 ]
 

@@ -1,27 +1,46 @@
-import { useQuery } from '@tanstack/react-query'
+import { useQuery, useQueryClient } from '@tanstack/react-query'
+import { useEffect } from 'react'
 import { useParams } from 'react-router-dom'
 import type { Analysis } from '#shared/schemas/analysis.ts'
+import { ApiError } from '../api/ApiError.ts'
 import { may, useStudy } from '../api/study.ts'
-import { analysisQuery } from '../features/analyses/analyses.api.ts'
+import { analysisQuery, analysisRunsQuery } from '../features/analyses/analyses.api.ts'
 import { analysisSub } from '../features/analyses/analysisSub.ts'
 import { provenanceLines } from '../features/analyses/provenanceLines.ts'
+import { RunStatus } from '../features/analyses/RunStatus.tsx'
 import { StoredAnalysis } from '../features/analyses/StoredAnalysis.tsx'
 import { datasetPairsQuery, datasetValuesQuery } from '../features/datasets/datasets.api.ts'
 import { ButtonLink } from '../ui/ButtonLink.tsx'
 import { ErrorNotice } from '../ui/ErrorNotice.tsx'
 import { PageHead } from '../ui/PageHead.tsx'
+import { Sheet } from '../ui/Sheet.tsx'
 import { SheetSkeleton } from '../ui/Skeleton.tsx'
 
 /** One stored analysis under its own address. */
 export default function AnalysisPage() {
   const study = useStudy()
   const { analysisId = '' } = useParams()
+  const queries = useQueryClient()
   const analysis = useQuery(analysisQuery(analysisId))
+  const notStored = analysis.error instanceof ApiError && analysis.error.status === 404
+  const runs = useQuery({ ...analysisRunsQuery(study.id), enabled: notStored })
+  const run = runs.data?.find((each) => each.id === analysisId)
+  const ended = notStored && runs.isFetched && !run
+  useEffect(() => {
+    // A run that is no longer told of has been stored meanwhile.
+    if (ended) void queries.invalidateQueries({ queryKey: analysisQuery(analysisId).queryKey })
+  }, [ended, queries, analysisId])
   if (analysis.data) return <Stored analysis={analysis.data} />
   return (
     <>
       <PageHead title="Analysis" back={{ to: `/studies/${study.id}/results`, label: 'Results' }} />
-      {analysis.error ? (
+      {run ? (
+        <Sheet>
+          <RunStatus studyId={study.id} run={run} />
+        </Sheet>
+      ) : notStored && runs.isPending ? (
+        <SheetSkeleton />
+      ) : analysis.error ? (
         <ErrorNotice
           what="The analysis could not be read"
           error={analysis.error}
@@ -36,8 +55,12 @@ export default function AnalysisPage() {
 
 function Stored({ analysis }: { analysis: Analysis }) {
   const study = useStudy()
-  const { kind, analyteKey, sessionRule } = analysis.parameters
-  const wanted = { analyteKey, sessionRule }
+  const { parameters } = analysis
+  const { kind } = parameters
+  const wanted =
+    kind === 'accuracy' || kind === 'agreement'
+      ? { analyteKey: parameters.analyteKey, sessionRule: parameters.sessionRule }
+      : { analyteKey: '', sessionRule: 'first' as const }
   const values = useQuery({
     ...datasetValuesQuery(analysis.datasetId, wanted),
     enabled: kind === 'accuracy',

@@ -1,8 +1,10 @@
-import { useQuery } from '@tanstack/react-query'
+import { useQuery, useQueryClient } from '@tanstack/react-query'
+import { useEffect } from 'react'
 import { formatCount } from '#shared/terms/numbers.ts'
 import { may, useStudy } from '../api/study.ts'
-import { analysesQuery } from '../features/analyses/analyses.api.ts'
+import { analysesQuery, analysisRunsQuery, isUnderWay } from '../features/analyses/analyses.api.ts'
 import { analysisColumns } from '../features/analyses/analysisColumns.tsx'
+import { RunStatus } from '../features/analyses/RunStatus.tsx'
 import { StandingFacts } from '../features/analyses/StandingFacts.tsx'
 import { datasetsQuery } from '../features/datasets/datasets.api.ts'
 import { ButtonLink } from '../ui/ButtonLink.tsx'
@@ -27,6 +29,16 @@ export default function ResultsPage() {
         actions={
           datasets.data && datasets.data.length > 0 ? (
             <>
+              {may(study, 'analysis.run') && (
+                <>
+                  <ButtonLink to="compare" kind="quiet">
+                    Compare biomarkers
+                  </ButtonLink>
+                  <ButtonLink to="panel" kind="quiet">
+                    Fit a panel
+                  </ButtonLink>
+                </>
+              )}
               <ButtonLink to="explore?kind=agreement" kind="quiet">
                 Explore agreement
               </ButtonLink>
@@ -71,6 +83,25 @@ function storedWords(many: number): string {
   return many === 1 ? '1 analysis' : `${formatCount(many)} analyses`
 }
 
+/** What is under way, and what ended without a result within a day. */
+function RunList({ studyId }: { studyId: string }) {
+  const queries = useQueryClient()
+  const runs = useQuery(analysisRunsQuery(studyId)).data ?? []
+  const underWay = runs.filter(isUnderWay).length
+  useEffect(() => {
+    // One more or one less under way: the list of what is stored may have changed.
+    if (underWay >= 0) void queries.invalidateQueries({ queryKey: analysesQuery(studyId).queryKey })
+  }, [underWay, queries, studyId])
+  if (runs.length === 0) return null
+  return (
+    <div className="mb-5 flex flex-col gap-4 border-b border-rule pb-5">
+      {runs.map((run) => (
+        <RunStatus key={run.jobId} studyId={studyId} run={run} />
+      ))}
+    </div>
+  )
+}
+
 type Newest = Parameters<typeof StandingFacts>[0]['dataset']
 
 function StoredAnalyses({ studyId, dataset }: { studyId: string; dataset: Newest }) {
@@ -88,6 +119,7 @@ function StoredAnalyses({ studyId, dataset }: { studyId: string; dataset: Newest
         />
       }
     >
+      <RunList studyId={studyId} />
       <DataTable
         caption="Stored analyses"
         columns={analysisColumns}

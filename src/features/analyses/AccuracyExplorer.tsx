@@ -1,18 +1,24 @@
 import { type ReactNode, useMemo, useState } from 'react'
 import { accuracyAtCutOffOf } from '#shared/analyses/accuracyAtCutOffOf.ts'
 import { accuracyOverallOf } from '#shared/analyses/accuracyOverallOf.ts'
+import { moreOnAreaOf } from '#shared/analyses/moreOnAreaOf.ts'
 import { refusalSentence } from '#shared/analyses/refusalSentence.ts'
+import type { AccuracyOptions } from '#shared/schemas/accuracyMore.ts'
 import type { AccuracyOverall, AccuracyParameters } from '#shared/schemas/analysis.ts'
 import type { Dataset, DatasetValues } from '#shared/schemas/dataset.ts'
+import { rocCurve } from '#shared/statistics/accuracy/rocCurve.ts'
 import { StatisticsError } from '#shared/statistics/StatisticsError.ts'
 import { unitLabel } from '#shared/terms/gases.ts'
 import { levelWords } from '#shared/terms/resultText.ts'
 import { Notice } from '../../ui/Notice.tsx'
 import { Sheet } from '../../ui/Sheet.tsx'
+import { AccuracyOptionsPanel, USUAL_OPTIONS } from './AccuracyOptionsPanel.tsx'
 import { AccuracyPanels } from './AccuracyPanels.tsx'
 import { countedNotes } from './countedNotes.ts'
+import { ExploredCutOffs } from './ExploredCutOffs.tsx'
 import { type ExplorerSettings, plannedCutOffOf } from './explorerSettings.ts'
 import { LeftOutList } from './LeftOutList.tsx'
+import { MoreOnArea } from './MoreOnArea.tsx'
 import { NumberBox } from './NumberBox.tsx'
 import { StandingFacts } from './StandingFacts.tsx'
 
@@ -49,6 +55,12 @@ export function AccuracyExplorer(props: AccuracyExplorerProps) {
       }),
     [overall, values, cutOff, direction, prevalence, sampling],
   )
+  const [options, setOptions] = useState(USUAL_OPTIONS)
+  const more = useMemo(() => {
+    const area = overall.figures?.area
+    if (!area || !options.partialArea) return null
+    return moreOnAreaOf(values, rocCurve({ ...values, direction }), area, options.partialArea)
+  }, [values, overall, direction, options.partialArea])
   const { counts } = values
   return (
     <>
@@ -108,6 +120,23 @@ export function AccuracyExplorer(props: AccuracyExplorerProps) {
             {overall.problem}
           </Notice>
         )}
+        {overall.figures && (
+          <>
+            <ExploredCutOffs
+              rules={overall.figures.rules}
+              values={values}
+              direction={direction}
+              resampling={options.resampling}
+              unit={unitLabel(values.unit)}
+            />
+            {more && <MoreOnArea found={more} />}
+            <AccuracyOptionsPanel
+              options={options}
+              onChange={(changes) => setOptions((before) => ({ ...before, ...changes }))}
+              unit={unitLabel(values.unit)}
+            />
+          </>
+        )}
       </Sheet>
       {overall.figures &&
         store({
@@ -118,9 +147,26 @@ export function AccuracyExplorer(props: AccuracyExplorerProps) {
           cutOff,
           confidence: CONFIDENCE,
           prevalence,
+          ...usable(options, overall.figures, values),
         })}
     </>
   )
+}
+
+/** What makes no sense for these data is left out: corrections without cut-offs, one value of several. */
+function usable(
+  options: AccuracyOptions,
+  { area }: AccuracyOverall,
+  { presentSubjects }: DatasetValues,
+): AccuracyOptions {
+  const clustered = presentSubjects !== null
+  return {
+    ...options,
+    resampling:
+      area && (!clustered || options.areaInterval === 'bootstrap') ? options.resampling : null,
+    ...(area ? {} : { areaInterval: 'delong', partialArea: null }),
+    ...(clustered ? { troubledResults: null, subgroups: [] } : {}),
+  }
 }
 
 type Attempt = { figures: AccuracyOverall; problem?: never } | { figures: null; problem: string }

@@ -1,6 +1,7 @@
 import { useState } from 'react'
 import { useNavigate } from 'react-router-dom'
 import { z } from 'zod'
+import { drawsOf } from '#shared/analyses/drawsOf.ts'
 import type { AnalysisParameters } from '#shared/schemas/analysis.ts'
 import { words } from '#shared/schemas/common.ts'
 import { may, useStudy } from '../../api/study.ts'
@@ -8,7 +9,7 @@ import { Form } from '../../forms/Form.tsx'
 import { TextField } from '../../forms/TextField.tsx'
 import { Button } from '../../ui/Button.tsx'
 import { Dialog } from '../../ui/Dialog.tsx'
-import { useRunAnalysis } from './analyses.api.ts'
+import { useAskForRun, useRunAnalysis } from './analyses.api.ts'
 
 type StoreAnalysisProps = {
   datasetId: string
@@ -23,6 +24,8 @@ export function StoreAnalysis({ datasetId, parameters, suggestedTitle }: StoreAn
   const study = useStudy()
   const navigate = useNavigate()
   const run = useRunAnalysis(study.id)
+  const ask = useAskForRun(study.id)
+  const takesAWhile = drawsOf(parameters) !== null
   const [open, setOpen] = useState(false)
   const [id] = useState(() => crypto.randomUUID())
   const close = () => setOpen(false)
@@ -44,6 +47,7 @@ export function StoreAnalysis({ datasetId, parameters, suggestedTitle }: StoreAn
         <p className="mb-4">
           The server computes it again from the frozen rows and keeps the result with everything
           that it takes to repeat it. A stored analysis cannot be changed or removed.
+          {takesAWhile && ' It draws random samples, so it may take a moment.'}
         </p>
         <Form
           schema={titled}
@@ -51,8 +55,11 @@ export function StoreAnalysis({ datasetId, parameters, suggestedTitle }: StoreAn
           submitLabel="Store it"
           busyLabel="Storing…"
           guard={false}
-          onSubmit={({ title }) => run.mutateAsync({ id, datasetId, title, parameters })}
-          onSaved={(stored) => navigate(`/studies/${study.id}/results/${stored.id}`)}
+          onSubmit={async ({ title }) => {
+            const request = { id, datasetId, title, parameters }
+            await (takesAWhile ? ask : run).mutateAsync(request)
+          }}
+          onSaved={() => navigate(`/studies/${study.id}/results/${id}`)}
           onCancel={close}
         >
           <TextField name="title" label="Title" />

@@ -8,12 +8,15 @@ import { CopyableHash } from '../../ui/CopyableHash.tsx'
 import { InstantText } from '../../ui/InstantText.tsx'
 import { Sheet } from '../../ui/Sheet.tsx'
 import { Skeleton } from '../../ui/Skeleton.tsx'
+import { AccuracyMoreView } from './AccuracyMoreView.tsx'
 import { AccuracyPanels } from './AccuracyPanels.tsx'
 import { AgreementPanels } from './AgreementPanels.tsx'
 import { countedNotes } from './countedNotes.ts'
 import { LeftOutList } from './LeftOutList.tsx'
 import { RepeatCheck } from './RepeatCheck.tsx'
 import { StandingFacts } from './StandingFacts.tsx'
+import { StoredComparison } from './StoredComparison.tsx'
+import { StoredPanel } from './StoredPanel.tsx'
 
 type StoredAnalysisProps = {
   analysis: Analysis
@@ -29,33 +32,46 @@ export function StoredAnalysis(props: StoredAnalysisProps) {
   const { analysis, values, pairs, provenance } = props
   return (
     <Sheet label="About this analysis" margin={<Margin {...props} />}>
-      {analysis.result.kind === 'accuracy' ? (
-        <StoredAccuracy analysis={analysis} values={values} provenance={provenance} />
-      ) : (
-        <StoredAgreement analysis={analysis} pairs={pairs} provenance={provenance} />
-      )}
+      <StoredResult analysis={analysis} values={values} pairs={pairs} provenance={provenance} />
     </Sheet>
   )
+}
+
+function StoredResult(props: Omit<StoredAnalysisProps, 'mayRepeat'>) {
+  const { analysis, values, pairs, provenance } = props
+  const { result, parameters } = analysis
+  if (result.kind === 'accuracy')
+    return <StoredAccuracy analysis={analysis} values={values} provenance={provenance} />
+  if (result.kind === 'agreement')
+    return <StoredAgreement analysis={analysis} pairs={pairs} provenance={provenance} />
+  if (result.kind === 'comparison' && parameters.kind === 'comparison')
+    return <StoredComparison result={result} parameters={parameters} provenance={provenance} />
+  if (result.kind === 'panel' && parameters.kind === 'panel')
+    return <StoredPanel result={result} parameters={parameters} />
+  return null
 }
 
 function StoredAccuracy(props: Pick<StoredAnalysisProps, 'analysis' | 'values' | 'provenance'>) {
   const { result, parameters } = props.analysis
   if (result.kind !== 'accuracy' || parameters.kind !== 'accuracy') return null
   return (
-    <AccuracyPanels
-      shown={{
-        analyteName: result.analyteName,
-        unit: unitLabel(result.unit),
-        direction: parameters.direction,
-        confidence: parameters.confidence,
-        prevalence: parameters.prevalence,
-        plannedCutOff: result.plannedCutOff,
-        overall: result,
-        atCutOff: result.atCutOff,
-      }}
-      values={props.values}
-      provenance={props.provenance}
-    />
+    <>
+      <AccuracyPanels
+        shown={{
+          analyteName: result.analyteName,
+          unit: unitLabel(result.unit),
+          direction: parameters.direction,
+          confidence: parameters.confidence,
+          prevalence: parameters.prevalence,
+          plannedCutOff: result.plannedCutOff,
+          overall: result,
+          atCutOff: result.atCutOff,
+        }}
+        values={props.values}
+        provenance={props.provenance}
+      />
+      <AccuracyMoreView result={result} />
+    </>
   )
 }
 
@@ -79,19 +95,30 @@ function StoredAgreement(props: Pick<StoredAnalysisProps, 'analysis' | 'pairs' |
   return <AgreementPanels shown={shown} provenance={props.provenance} />
 }
 
+function intervalMethod(result: Analysis['result']): string | null {
+  switch (result.kind) {
+    case 'accuracy':
+      return result.area?.method ?? null
+    case 'agreement':
+      return result.limitsMethod
+    case 'comparison':
+      return result.curves[0]?.area?.method ?? null
+    default:
+      return null
+  }
+}
+
 function Margin({ analysis, mayRepeat }: StoredAnalysisProps) {
   const { result, parameters } = analysis
-  const interval =
-    result.kind === 'accuracy'
-      ? result.area && `${result.area.method}, ${levelWords(parameters.confidence)}`
-      : `${result.limitsMethod}, ${levelWords(parameters.confidence)}`
+  const method = intervalMethod(result)
+  const interval = method && `${method}, ${levelWords(parameters.confidence)}`
   return (
     <>
       <StandingFacts
         caution={analysis.caution}
         dataset={{ ...analysis, hash: analysis.datasetHash }}
         counted={<Counted analysis={analysis} />}
-        {...(result.kind === 'accuracy' ? { reference: analysis.referenceStandard } : {})}
+        {...('present' in result.counts ? { reference: analysis.referenceStandard } : {})}
         {...(interval ? { interval } : {})}
         run={
           <>

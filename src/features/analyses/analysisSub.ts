@@ -9,6 +9,8 @@ export function analysisSub({
   kind,
 }: Pick<Analysis, 'badge' | 'asProtocol' | 'protocolVersion' | 'kind'>): string {
   const standing = ANALYSIS_BADGE_LABELS[badge]
+  if (kind !== 'accuracy' && kind !== 'agreement')
+    return `${standing}, not planned in protocol version ${protocolVersion}`
   const stated = kind === 'accuracy' ? 'the cut-off planned' : 'the acceptance limits stated'
   return asProtocol
     ? `${standing}, with ${stated} in protocol version ${protocolVersion}`

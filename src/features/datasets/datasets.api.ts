@@ -1,6 +1,12 @@
 import { queryOptions } from '@tanstack/react-query'
 import { z } from 'zod'
-import { dataset, datasetPairs, datasetSummary, datasetValues } from '#shared/schemas/dataset.ts'
+import {
+  dataset,
+  datasetGroups,
+  datasetPairs,
+  datasetSummary,
+  datasetValues,
+} from '#shared/schemas/dataset.ts'
 import type { SessionRule } from '#shared/terms/analysis.ts'
 import { request } from '../../api/http.ts'
 import { studyKey } from '../../api/study.ts'
@@ -23,6 +29,15 @@ export const datasetQuery = (datasetId: string) =>
     queryFn: ({ signal }) => request(dataset, 'get', `/api/datasets/${datasetId}`, { signal }),
   })
 
+/** What the subjects of a dataset can be divided by. */
+export const datasetGroupsQuery = (datasetId: string) =>
+  queryOptions({
+    ...FROZEN,
+    queryKey: ['datasets', datasetId, 'groups'],
+    queryFn: ({ signal }) =>
+      request(datasetGroups, 'get', `/api/datasets/${datasetId}/groups`, { signal }),
+  })
+
 type Wanted = { analyteKey: string; sessionRule: SessionRule }
 
 /** Sensor values of one analyte by reference outcome. */
@@ -35,7 +50,10 @@ export const datasetValuesQuery = (datasetId: string, wanted: Wanted) =>
   })
 
 /** Sensor and reference analyser value of one analyte, pair by pair. */
-export const datasetPairsQuery = (datasetId: string, wanted: Wanted) =>
+export const datasetPairsQuery = (
+  datasetId: string,
+  wanted: Wanted & { referenceKey?: string },
+) =>
   queryOptions({
     ...FROZEN,
     queryKey: ['datasets', datasetId, 'pairs', wanted],

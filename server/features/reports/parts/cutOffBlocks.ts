@@ -39,29 +39,33 @@ export function cutOffTable(result: AccuracyResult, unit: string): ReportTable {
       { label: 'Cut-off', align: 'right' },
       { label: 'Sensitivity', align: 'right' },
       { label: 'Specificity', align: 'right' },
-      { label: 'Sensitivity, corrected', align: 'right' },
-      { label: 'Specificity, corrected', align: 'right' },
     ],
     rows: [
-      ...planned.map((row) => [...row, 'not needed', 'not needed']),
+      ...planned,
       ...rules.map(({ rule, cutOffs: [preferred] }) => [
         ANALYSIS_BADGE_LABELS.exploratory,
         `from these data: ${CUT_OFF_RULE_LABELS[rule]}`,
         preferred?.threshold == null
           ? 'nobody positive'
           : withUnit(formatConcentration(preferred.threshold), unit),
-        formatEstimate(preferred?.sensitivity),
-        formatEstimate(preferred?.specificity),
-        ...correctedTexts(result, rule),
+        ...chosenTexts(result, rule, preferred),
       ]),
     ],
   }
 }
 
-function correctedTexts({ corrections }: AccuracyResult, rule: CutOffRule): [string, string] {
+/** As on these data and, under it, as to be expected elsewhere. */
+function chosenTexts(
+  { corrections }: AccuracyResult,
+  rule: CutOffRule,
+  here: { sensitivity: number; specificity: number } | undefined,
+): [string, string] {
   const found = corrections?.rules.find((each) => each.rule === rule)
-  if (!found) return ['not corrected', 'not corrected']
-  return [formatEstimate(found.corrected.sensitivity), formatEstimate(found.corrected.specificity)]
+  const text = (name: 'sensitivity' | 'specificity') => {
+    const corrected = found ? `corrected ${formatEstimate(found.corrected[name])}` : 'not corrected'
+    return `${formatEstimate((found?.apparent ?? here)?.[name])}\n${corrected}`
+  }
+  return [text('sensitivity'), text('specificity')]
 }
 
 /** Sensitivity and specificity at the planned cut-off, where the analysis was run at it. */
