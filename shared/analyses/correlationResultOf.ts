@@ -32,7 +32,10 @@ export function correlationResultOf(
  * subject. Measurands and units may differ.
  * @throws StatisticsError too-few, constant
  */
-function rankCorrelationOf({ sensor, reference }: AgreementPairs, level: number): Figures {
+export function rankCorrelationOf(
+  { sensor, reference }: Pick<AgreementPairs, 'sensor' | 'reference'>,
+  level: number,
+): Figures {
   const { rho, interval, p } = spearman({ first: sensor, second: reference }, { level })
   return {
     rankCorrelation: {

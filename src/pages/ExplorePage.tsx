@@ -1,15 +1,19 @@
 import { useQuery } from '@tanstack/react-query'
-import type { ReactNode } from 'react'
+import type { ComponentType, ReactNode } from 'react'
 import type { AnalysisParameters } from '#shared/schemas/analysis.ts'
 import type { Dataset } from '#shared/schemas/dataset.ts'
+import type { AnalysisKind } from '#shared/terms/analysis.ts'
 import { useStudy } from '../api/study.ts'
 import { AccuracyExplorer } from '../features/analyses/AccuracyExplorer.tsx'
 import { AgreementExplorer } from '../features/analyses/AgreementExplorer.tsx'
+import { CorrelationExplorer } from '../features/analyses/CorrelationExplorer.tsx'
 import { ExplorerToolbar } from '../features/analyses/ExplorerToolbar.tsx'
 import {
   type ExplorerSettings,
   useExplorerSettings,
 } from '../features/analyses/explorerSettings.ts'
+import { OtherMeasurand } from '../features/analyses/OtherMeasurand.tsx'
+import { PrecisionExplorer } from '../features/analyses/PrecisionExplorer.tsx'
 import { provenanceLines } from '../features/analyses/provenanceLines.ts'
 import { StoreAnalysis } from '../features/analyses/StoreAnalysis.tsx'
 import {
@@ -66,7 +70,7 @@ function Explorer({ dataset }: { dataset: Dataset }) {
       severalSessions={severalSessions}
     />
   )
-  const Part = settings.kind === 'accuracy' ? Accuracy : Agreement
+  const Part = PARTS[settings.kind] ?? Accuracy
   return (
     <>
       <PageHead
@@ -80,13 +84,15 @@ function Explorer({ dataset }: { dataset: Dataset }) {
             options={[
               { value: 'accuracy', label: 'Accuracy' },
               { value: 'agreement', label: 'Agreement' },
+              { value: 'precision', label: 'Precision' },
+              { value: 'correlation', label: 'Rank correlation' },
             ]}
             value={settings.kind}
             onChange={(kind) => change({ kind })}
           />
         }
       />
-      <Part {...{ dataset, settings, provenance, store, toolbar }} />
+      <Part {...{ dataset, settings, change, provenance, store, toolbar }} />
     </>
   )
 }
@@ -94,6 +100,7 @@ function Explorer({ dataset }: { dataset: Dataset }) {
 type PartProps = {
   dataset: Dataset
   settings: ExplorerSettings
+  change: (changes: Partial<ExplorerSettings>) => void
   provenance: readonly string[]
   store: (parameters: AnalysisParameters) => ReactNode
   toolbar: (severalSessions: number) => ReactNode
@@ -116,8 +123,21 @@ function Accuracy({ dataset, settings, provenance, store, toolbar }: PartProps) 
   )
 }
 
-function Agreement({ dataset, settings, provenance, store, toolbar }: PartProps) {
-  const pairs = useQuery(datasetPairsQuery(dataset.id, wantedOf(settings)))
+function Agreement({ dataset, settings, change, provenance, store, toolbar }: PartProps) {
+  const sameMeasurand = settings.referenceKey === settings.analyteKey
+  const pairs = useQuery({
+    ...datasetPairsQuery(dataset.id, wantedOf(settings)),
+    enabled: sameMeasurand,
+  })
+  if (!sameMeasurand)
+    return (
+      <OtherMeasurand
+        dataset={dataset}
+        settings={settings}
+        toolbar={toolbar(0)}
+        onChange={change}
+      />
+    )
   if (!pairs.data) return <Loading error={pairs.error} retry={() => void pairs.refetch()} />
   return (
     <AgreementExplorer
@@ -132,16 +152,56 @@ function Agreement({ dataset, settings, provenance, store, toolbar }: PartProps)
   )
 }
 
+function Correlation({ dataset, settings, store, toolbar }: PartProps) {
+  const { referenceKey } = settings
+  const pairs = useQuery(datasetPairsQuery(dataset.id, { ...wantedOf(settings), referenceKey }))
+  if (!pairs.data) return <Loading error={pairs.error} retry={() => void pairs.refetch()} />
+  return (
+    <CorrelationExplorer
+      dataset={dataset}
+      pairs={pairs.data}
+      toolbar={toolbar(pairs.data.counts.severalSessions)}
+      store={store}
+    />
+  )
+}
+
+function Precision({ dataset, settings, store, toolbar }: PartProps) {
+  const study = useStudy()
+  return (
+    <PrecisionExplorer
+      key={settings.analyteKey}
+      studyId={study.id}
+      dataset={dataset}
+      settings={settings}
+      toolbar={toolbar(0)}
+      store={store}
+    />
+  )
+}
+
 function Loading({ error, retry }: { error: unknown; retry: () => void }) {
   if (error)
     return <ErrorNotice what="The values could not be read" error={error} onRetry={retry} />
   return <SheetSkeleton />
 }
 
+const PARTS: Partial<Record<AnalysisKind, ComponentType<PartProps>>> = {
+  accuracy: Accuracy,
+  agreement: Agreement,
+  precision: Precision,
+  correlation: Correlation,
+}
+
 const wantedOf = ({ analyteKey, sessionRule }: ExplorerSettings) => ({ analyteKey, sessionRule })
 
-function titleOf({ manifest, protocol }: Dataset, { kind, analyteKey }: ExplorerSettings): string {
-  const name = manifest.analytes.find((each) => each.key === analyteKey)?.name ?? 'Analyte'
+function titleOf({ manifest, protocol }: Dataset, settings: ExplorerSettings): string {
+  const { kind, analyteKey, referenceKey } = settings
+  const nameOf = (key: string) => manifest.analytes.find((each) => each.key === key)?.name
+  const name = nameOf(analyteKey) ?? 'Analyte'
+  if (kind === 'precision') return `${name}: from session to session`
+  if (kind === 'correlation' && referenceKey !== analyteKey)
+    return `${name} by the sensor, ${nameOf(referenceKey)} by the reference analyser`
   return kind === 'accuracy'
     ? `${name} against ${protocol.targetCondition}`
     : `${name}: sensor against reference analyser`

@@ -1,33 +1,37 @@
 import { type ReactNode, useCallback, useId, useMemo } from 'react'
+import { lineUnit } from '#shared/analyses/agreementTables.ts'
+import { differencePlotOf } from '#shared/analyses/differencePlotOf.ts'
 import { DifferencePlot } from '#shared/figures/DifferencePlot.tsx'
 import { differencePairsTable } from '#shared/figures/differencePlotTable.ts'
-import type { DifferencePlotData } from '#shared/figures/differencePlotTypes.ts'
-import { ScatterIdentity } from '#shared/figures/ScatterIdentity.tsx'
-import { scatterIdentityTable } from '#shared/figures/scatterIdentityTable.ts'
+import { MIDDLE_LINE_LABELS } from '#shared/terms/agreementTerms.ts'
 import { agreementDecimals, lineTexts, withUnit } from '#shared/terms/resultText.ts'
 import { FigureNumbers } from '../../ui/FigureNumbers.tsx'
 import { useFigureTheme } from '../../ui/useFigureTheme.ts'
 import { useMeasuredWidth } from '../../ui/useMeasuredWidth.ts'
 import type { AgreementShown } from './agreementShown.ts'
 import { LimitsTable } from './LimitsTable.tsx'
+import { MethodComparisonPanels } from './MethodComparisonPanels.tsx'
+import { OutsideList } from './OutsideList.tsx'
 
 type AgreementPanelsProps = {
   shown: AgreementShown
   provenance: readonly string[]
-  /** Settings under the table of limits, while exploring. */
-  children?: ReactNode
+  /** Settings beside the table of limits, and above the lines, while exploring. */
+  limitsSettings?: ReactNode
+  linesSettings?: ReactNode
 }
 
-/** Differences against means with bias and limits, their table, and sensor against reference. */
-export function AgreementPanels({ shown, provenance, children }: AgreementPanelsProps) {
+/** Differences against means with their limits, the table of these, and sensor against reference. */
+export function AgreementPanels(props: AgreementPanelsProps) {
+  const { shown, provenance, limitsSettings, linesSettings } = props
   const id = useId()
-  const { bias, sd } = shown.figures
+  const { bias, sd, scale } = shown.figures
   const { estimate, interval } = lineTexts(bias, agreementDecimals(sd))
   return (
     <>
       <section aria-labelledby={`${id}-bias`} className="min-w-0">
         <h2 id={`${id}-bias`}>
-          Bias {withUnit(estimate, shown.unit)}{' '}
+          {MIDDLE_LINE_LABELS[scale]} {withUnit(estimate, lineUnit(shown.figures, shown.unit))}{' '}
           <span className="font-normal text-ink-2">({interval})</span>
         </h2>
         <Differences shown={shown} provenance={provenance} />
@@ -36,19 +40,23 @@ export function AgreementPanels({ shown, provenance, children }: AgreementPanels
         <section aria-labelledby={`${id}-limits`} className="min-w-0">
           <h2 id={`${id}-limits`}>Limits of agreement</h2>
           <LimitsTable figures={shown.figures} unit={shown.unit} confidence={shown.confidence} />
-          {children}
         </section>
-        <Scatter shown={shown} provenance={provenance} />
+        <div className="min-w-0">
+          {limitsSettings}
+          <OutsideList shown={shown} />
+        </div>
       </div>
+      <MethodComparisonPanels shown={shown} provenance={provenance} settings={linesSettings} />
     </>
   )
 }
 
-function Differences({ shown, provenance }: AgreementPanelsProps) {
+function Differences({ shown, provenance }: Pick<AgreementPanelsProps, 'shown' | 'provenance'>) {
   const id = useId()
   const theme = useFigureTheme()
   const { ref, width } = useMeasuredWidth<HTMLDivElement>({ least: 300, most: 980, first: 680 })
-  const plot = useMemo(() => plotOf(shown), [shown])
+  const { pairs, figures, unit } = shown
+  const plot = useMemo(() => differencePlotOf(pairs, figures, unit), [pairs, figures, unit])
   const table = useCallback(() => differencePairsTable(plot), [plot])
   return (
     <div ref={ref}>
@@ -63,62 +71,4 @@ function Differences({ shown, provenance }: AgreementPanelsProps) {
       />
     </div>
   )
-}
-
-function Scatter({ shown, provenance }: AgreementPanelsProps) {
-  const id = useId()
-  const theme = useFigureTheme()
-  const { ref, width } = useMeasuredWidth<HTMLElement>({ least: 280, most: 520, first: 470 })
-  const { sensor, reference, subjects } = shown.pairs
-  const { unit } = shown
-  const pairs = useMemo(
-    () =>
-      sensor.map((value, at) => ({
-        sensor: value,
-        reference: reference[at]!,
-        subject: subjects[at]!,
-      })),
-    [sensor, reference, subjects],
-  )
-  const table = useCallback(() => scatterIdentityTable({ pairs, unit }), [pairs, unit])
-  return (
-    <section aria-labelledby={`${id}-scatter`} ref={ref} className="min-w-0">
-      <h2 id={`${id}-scatter`}>Sensor against reference</h2>
-      <div style={{ maxWidth: width }}>
-        <ScatterIdentity
-          id={`${id}-identity`}
-          pairs={pairs}
-          unit={unit}
-          width={width}
-          theme={theme}
-        />
-      </div>
-      <FigureNumbers
-        summary="Both readings in numbers"
-        table={table}
-        provenance={provenance}
-        fileName="sensor-and-reference"
-      />
-    </section>
-  )
-}
-
-function plotOf({ pairs, figures, unit }: AgreementShown): DifferencePlotData {
-  const { sensor, reference, subjects } = pairs
-  const line = ({ estimate, lower, upper }: typeof figures.bias) => ({
-    intercept: estimate,
-    interval: { lower, upper },
-  })
-  return {
-    pairs: sensor.map((value, at) => ({
-      mean: (value + reference[at]!) / 2,
-      difference: value - reference[at]!,
-      subject: subjects[at]!,
-    })),
-    bias: line(figures.bias),
-    lowerLimit: line(figures.lowerLimit),
-    upperLimit: line(figures.upperLimit),
-    unit,
-    ...(figures.acceptance ? { acceptance: figures.acceptance } : {}),
-  }
 }

@@ -15,6 +15,7 @@ type ExplorerToolbarProps = {
 /** Which analyte, in which direction, and which value of a subject with several sessions. */
 export function ExplorerToolbar(props: ExplorerToolbarProps) {
   const { dataset, settings, onChange, severalSessions } = props
+  const withReference = settings.kind === 'agreement' || settings.kind === 'correlation'
   const planned = plannedDirection(dataset, settings.analyteKey)
   return (
     <div className="mb-5 grid gap-x-5 gap-y-3 border-b border-rule pb-5 tablet:grid-cols-[repeat(auto-fill,minmax(250px,1fr))]">
@@ -27,6 +28,7 @@ export function ExplorerToolbar(props: ExplorerToolbarProps) {
             onChange={(event) =>
               onChange({
                 analyteKey: event.target.value,
+                referenceKey: event.target.value,
                 direction: plannedDirection(dataset, event.target.value) ?? 'higher',
               })
             }
@@ -60,6 +62,29 @@ export function ExplorerToolbar(props: ExplorerToolbarProps) {
               {DIRECTIONS.map((direction) => (
                 <option key={direction} value={direction}>
                   {DIRECTION_LABELS[direction]}
+                </option>
+              ))}
+            </select>
+          )}
+        </Choice>
+      )}
+      {withReference && dataset.manifest.analytes.length > 1 && (
+        <Choice
+          label="Reference values of"
+          hint={
+            settings.referenceKey === settings.analyteKey ? 'The same analyte' : 'Another analyte'
+          }
+        >
+          {(id) => (
+            <select
+              id={id}
+              className="control"
+              value={settings.referenceKey}
+              onChange={(event) => onChange({ referenceKey: event.target.value })}
+            >
+              {dataset.manifest.analytes.map((analyte) => (
+                <option key={analyte.key} value={analyte.key}>
+                  {analyte.name}
                 </option>
               ))}
             </select>

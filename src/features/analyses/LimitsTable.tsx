@@ -1,9 +1,11 @@
-import type { AgreementFigures } from '#shared/schemas/analysis.ts'
+import { agreementHintWords } from '#shared/analyses/agreementHintWords.ts'
+import { limitsTable, lineUnit, replicatesWords } from '#shared/analyses/agreementTables.ts'
+import type { AgreementFigures } from '#shared/schemas/agreement.ts'
 import { ACCEPTANCE_VERDICT_WORDS, type AcceptanceVerdict } from '#shared/terms/analysis.ts'
-import { formatConcentration, formatEstimate } from '#shared/terms/numbers.ts'
-import { agreementDecimals, intervalHeading, lineTexts } from '#shared/terms/resultText.ts'
+import { formatConcentration } from '#shared/terms/numbers.ts'
+import { withUnit } from '#shared/terms/resultText.ts'
 import { Notice, type NoticeTone } from '../../ui/Notice.tsx'
-import { StaticTable } from '../../ui/StaticTable.tsx'
+import { ResultTableView } from './ResultTableView.tsx'
 
 const TONES: Record<AcceptanceVerdict, NoticeTone> = {
   within: 'good',
@@ -13,47 +15,27 @@ const TONES: Record<AcceptanceVerdict, NoticeTone> = {
 
 type LimitsTableProps = { figures: AgreementFigures; unit: string; confidence: number }
 
-/** Bias and limits with their intervals, and how they stand to the acceptance limits. */
+/** Bias and limits with their intervals, hints, and how they stand to the acceptance limits. */
 export function LimitsTable({ figures, unit, confidence }: LimitsTableProps) {
-  const { bias, lowerLimit, upperLimit, sd, acceptance, caveats } = figures
-  const decimals = agreementDecimals(sd)
-  const row = (name: string, line: typeof bias) => {
-    const { estimate, interval } = lineTexts(line, decimals)
-    return { key: name, cells: [name, estimate, interval] }
-  }
+  const { acceptance, caveats } = figures
+  const replicates = replicatesWords(figures, unit)
+  const shownIn = lineUnit(figures, unit)
   return (
     <>
-      <StaticTable
-        caption="Bias and limits of agreement"
-        columns={[
-          { header: `Sensor − reference${unit ? ` (${unit})` : ''}` },
-          { header: 'Estimate', numeric: true },
-          { header: intervalHeading(confidence), numeric: true },
-        ]}
-        rows={[
-          row('Upper limit', upperLimit),
-          row('Bias', bias),
-          row('Lower limit', lowerLimit),
-          {
-            key: 'sd',
-            cells: ['SD of the differences', formatEstimate(sd, decimals), ''],
-          },
-        ]}
-      />
+      <ResultTableView table={limitsTable(figures, unit, confidence)} />
       <div className="mt-3 space-y-3 text-sm text-ink-2">
-        <p>
-          95 % of differences are expected between the limits. Intervals: {figures.limitsMethod} for
-          the limits; {figures.biasMethod} for the bias.
-        </p>
-        {caveats.map((caveat) => (
-          <p key={caveat} className="text-ink">
-            {caveat}
+        {[...caveats, ...(replicates ? [replicates] : [])].map((sentence) => (
+          <p key={sentence} className="text-ink">
+            {sentence}
           </p>
+        ))}
+        {agreementHintWords(figures).map((hint) => (
+          <p key={hint}>{hint}</p>
         ))}
         {acceptance ? (
           <Notice
             tone={TONES[acceptance.verdict]}
-            title={`Acceptable from ${formatConcentration(acceptance.lower)} to ${formatConcentration(acceptance.upper)} ${unit}`}
+            title={`Acceptable from ${formatConcentration(acceptance.lower)} to ${withUnit(formatConcentration(acceptance.upper), shownIn)}`}
           >
             {ACCEPTANCE_VERDICT_WORDS[acceptance.verdict]}
           </Notice>

@@ -11,9 +11,12 @@ import { Skeleton } from '../../ui/Skeleton.tsx'
 import { AccuracyMoreView } from './AccuracyMoreView.tsx'
 import { AccuracyPanels } from './AccuracyPanels.tsx'
 import { AgreementPanels } from './AgreementPanels.tsx'
+import { CorrelationPanels } from './CorrelationPanels.tsx'
 import { countedNotes } from './countedNotes.ts'
 import { LeftOutList } from './LeftOutList.tsx'
+import { PrecisionPanels } from './PrecisionPanels.tsx'
 import { RepeatCheck } from './RepeatCheck.tsx'
+import { readingNotes } from './readingNotes.ts'
 import { StandingFacts } from './StandingFacts.tsx'
 import { StoredComparison } from './StoredComparison.tsx'
 import { StoredPanel } from './StoredPanel.tsx'
@@ -48,6 +51,10 @@ function StoredResult(props: Omit<StoredAnalysisProps, 'mayRepeat'>) {
     return <StoredComparison result={result} parameters={parameters} provenance={provenance} />
   if (result.kind === 'panel' && parameters.kind === 'panel')
     return <StoredPanel result={result} parameters={parameters} />
+  if (result.kind === 'precision' && parameters.kind === 'precision')
+    return <PrecisionPanels result={result} parameters={parameters} />
+  if (result.kind === 'correlation')
+    return <CorrelationPanels figures={result} {...result} confidence={parameters.confidence} />
   return null
 }
 
@@ -80,11 +87,12 @@ function StoredAgreement(props: Pick<StoredAnalysisProps, 'analysis' | 'pairs' |
   const { result, parameters } = props.analysis
   const shown = useMemo(
     () =>
-      result.kind === 'agreement' && pairs
+      result.kind === 'agreement' && parameters.kind === 'agreement' && pairs
         ? {
             analyteName: result.analyteName,
             unit: unitLabel(result.unit),
             confidence: parameters.confidence,
+            errorVarianceRatio: parameters.errorVarianceRatio,
             figures: result,
             pairs,
           }
@@ -101,6 +109,10 @@ function intervalMethod(result: Analysis['result']): string | null {
       return result.area?.method ?? null
     case 'agreement':
       return result.limitsMethod
+    case 'precision':
+      return result.withinSubjectSd.method
+    case 'correlation':
+      return result.rankCorrelation.method
     case 'comparison':
       return result.curves[0]?.area?.method ?? null
     default:
@@ -147,7 +159,13 @@ function Counted({ analysis: { result, parameters } }: { analysis: Analysis }): 
       subjects={counts.subjects}
       counted={'counted' in counts ? counts.counted : counts.present + counts.absent}
       leftOut={counts.leftOut}
-      notes={countedNotes(counts, parameters.sessionRule)}
+      notes={
+        'sessionRule' in parameters
+          ? countedNotes(counts, parameters.sessionRule)
+          : 'pairs' in counts
+            ? readingNotes(counts)
+            : []
+      }
     />
   )
 }

@@ -1,4 +1,5 @@
-import type { AgreementFigures } from '#shared/schemas/analysis.ts'
+import type { AgreementPairs } from '#shared/analyses/agreementPairs.ts'
+import type { AgreementFigures } from '#shared/schemas/agreement.ts'
 
 /** What the panels of an agreement analysis draw, stored or explored. */
 export type AgreementShown = {
@@ -6,6 +7,7 @@ export type AgreementShown = {
   /** As a person reads it. */
   unit: string
   confidence: number
+  errorVarianceRatio: number
   figures: AgreementFigures
-  pairs: { sensor: readonly number[]; reference: readonly number[]; subjects: readonly string[] }
+  pairs: Omit<AgreementPairs, 'counts'>
 }

@@ -13,6 +13,8 @@ import { DIRECTIONS, type Direction } from '#shared/terms/protocol.ts'
 export type ExplorerSettings = {
   kind: AnalysisKind
   analyteKey: string
+  /** Analyte of the reference values, for agreement and rank correlation. */
+  referenceKey: string
   sessionRule: SessionRule
   direction: Direction
 }
@@ -35,6 +37,7 @@ function settingsFrom(search: URLSearchParams, { manifest, protocol }: Dataset):
   return {
     kind,
     analyteKey,
+    referenceKey: oneOf(keys, search.get('referenceKey')) ?? analyteKey,
     sessionRule: oneOf(SESSION_RULES, search.get('sessionRule')) ?? 'first',
     direction: oneOf(DIRECTIONS, search.get('direction')) ?? biomarker?.direction ?? 'higher',
   }

@@ -50,10 +50,7 @@ export const datasetValuesQuery = (datasetId: string, wanted: Wanted) =>
   })
 
 /** Sensor and reference analyser value of one analyte, pair by pair. */
-export const datasetPairsQuery = (
-  datasetId: string,
-  wanted: Wanted & { referenceKey?: string },
-) =>
+export const datasetPairsQuery = (datasetId: string, wanted: Wanted & { referenceKey?: string }) =>
   queryOptions({
     ...FROZEN,
     queryKey: ['datasets', datasetId, 'pairs', wanted],
