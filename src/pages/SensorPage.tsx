@@ -3,6 +3,7 @@ import { SENSOR_METHODS } from '#shared/statistics/sensor/SENSOR_METHODS.ts'
 import { statisticsVersion } from '#shared/statistics/statisticsVersion.ts'
 import { CAUTIONS, LOCAL_PROTOCOL } from '#shared/terms/cautions.ts'
 import { CalibrationPart } from '../features/sensors/CalibrationPart.tsx'
+import { ConversionsPart } from '../features/sensors/ConversionsPart.tsx'
 import { DetectionPart } from '../features/sensors/DetectionPart.tsx'
 import { NoisePart } from '../features/sensors/NoisePart.tsx'
 import { SENSOR_PARTS, type SensorPart } from '../features/sensors/sensorParts.ts'
@@ -46,6 +47,7 @@ export default function SensorPage() {
         {part.key === 'detection' && <DetectionPart standards={standards} blanks={blanks} />}
         {part.key === 'noise' && <NoisePart provenance={provenance} />}
         {part.key === 'uncertainty' && <UncertaintyPart />}
+        {part.key === 'conversions' && <ConversionsPart />}
       </Sheet>
     </>
   )

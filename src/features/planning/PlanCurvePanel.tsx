@@ -15,7 +15,11 @@ export function PlanCurvePanel({ curve, provenance }: PlanCurvePanelProps) {
   const { ref, width } = useMeasuredWidth<HTMLElement>({ least: 280, most: 620, first: 520 })
   const table = useCallback(() => planCurveTable(curve), [curve])
   return (
-    <section aria-labelledby={`${id}-title`} ref={ref} className="min-w-0">
+    <section
+      aria-labelledby={`${id}-title`}
+      ref={ref}
+      className="min-w-0 print:max-w-[115mm] print:break-inside-avoid"
+    >
       <h2 id={`${id}-title`}>{curve.title}</h2>
       <figure style={{ maxWidth: width }} className="mb-3">
         <PlanCurve id={`${id}-curve`} curve={curve} width={width} theme={theme} />
