@@ -318,7 +318,7 @@ describe('SENSOR', () => {
 
 describe('volume at body temperature', () => {
   const pieces = [air(3), breath(10), air(3)]
-  // Factors of breath.md's published tables, computed by the WMO formula by hand.
+  // Factors by the WMO formula, computed by hand; published tables print 1.102 and 1.091 for 20 and 22 °C.
   test.each([
     [20, undefined, 1.10176],
     [22, undefined, 1.09093],

@@ -2,6 +2,7 @@ import fc from 'fast-check'
 import { describe, expect, test } from 'vitest'
 import { readNumber } from '#shared/breath/file/readNumber.ts'
 import { readPlainRow } from '#shared/breath/file/readPlainRow.ts'
+import { seededNoise } from './support/seededNoise.ts'
 
 const encoder = new TextEncoder()
 const numberOf = (text: string) => {
@@ -52,6 +53,29 @@ test('every double that prints as a plain decimal reads back as itself', () => {
   )
 })
 
+test('decimals of 14 to 20 digits round as Number() rounds them, a hundred thousand times over', () => {
+  const next = seededNoise(20_250_304)
+  const digit = () => Math.floor(((next() + 1) / 2) * 10)
+  for (let i = 0; i < 100_000; i++) {
+    const length = 14 + (i % 7)
+    const all = Array.from({ length }, digit).join('')
+    const point = i % (length + 1)
+    const text = `${all.slice(0, point)}.${all.slice(point)}`
+    if (!Object.is(numberOf(text), Number(text))) expect.fail(text)
+  }
+})
+
+test('decimals halfway between two doubles, and one digit beside it, round as Number() rounds them', () => {
+  // k + 1/2 for odd and even k of 53 bits, written out: 2^52 + n + 0.5.
+  for (let n = 0; n < 2000; n++) {
+    const whole = 4_503_599_627_370_496n + BigInt(n)
+    for (const part of ['.5', '.49', '.51', '.50', '.4']) {
+      const text = `${whole}${part}`
+      if (!Object.is(numberOf(text), Number(text))) expect.fail(text)
+    }
+  }
+})
+
 test('whatever is no plain decimal is not a number, and whatever is one is', () => {
   const plain = /^[+-]?(\d+\.?\d*|\.\d+)([eE][+-]?\d+)?$/
   const pieces = fc.constantFrom('0', '7', '12', '.', '-', '+', 'e', 'E', 'x', ' ', ',', 'Infinity')
@@ -84,11 +108,11 @@ describe('numbers that try the rounding', () => {
   })
 })
 
-test('a line of short decimals reads the quick way as Number() reads its cells', () => {
+test('a line of decimals up to 18 digits reads the quick way as Number() reads its cells', () => {
   const cell = fc
-    .tuple(fc.boolean(), fc.integer({ min: 0, max: 999_999_999 }), fc.integer({ min: 0, max: 9 }))
-    .map(([isNegative, mantissa, decimals]) => {
-      const all = String(mantissa).padStart(decimals, '0')
+    .tuple(fc.boolean(), digits(18), fc.integer({ min: 0, max: 18 }))
+    .map(([isNegative, all, point]) => {
+      const decimals = Math.min(point, all.length)
       const whole = all.slice(0, all.length - decimals)
       return `${isNegative ? '-' : ''}${whole}${decimals ? `.${all.slice(all.length - decimals)}` : ''}`
     })
@@ -107,9 +131,17 @@ test('a line of short decimals reads the quick way as Number() reads its cells',
   )
 })
 
-test.each(['1,2', '1,2,3,4', '1,,3', '1,2,x', '1,2,3e1', ' 1,2,3', '1,2,1234567890', '1,2,3;', ''])(
-  'the quick way leaves the line "%s" to the careful one',
-  (line) => {
-    expect(readPlainRow(encoder.encode(`${line}\n`), 0, new Float64Array(3))).toBe(-1)
-  },
-)
+test.each([
+  '1,2',
+  '1,2,3,4',
+  '1,,3',
+  '1,2,x',
+  '1,2,3e1',
+  ' 1,2,3',
+  '1,2,1234567890123456789',
+  '+1,2,3',
+  '1,2,3;',
+  '',
+])('the quick way leaves the line "%s" to the careful one', (line) => {
+  expect(readPlainRow(encoder.encode(`${line}\n`), 0, new Float64Array(3))).toBe(-1)
+})

@@ -1,65 +1,53 @@
+import { decimalValue } from './decimalValue.ts'
+
 const ZERO = 48
 const NINE = 57
 const POINT = 46
 const MINUS = 45
 const PLUS = 43
-
-/** Powers of ten that a double holds exactly. */
-const EXACT_POWERS = Float64Array.from({ length: 23 }, (_, power) => Number(`1e${power}`))
-
-/** Any integer of so many digits is below 2^53 and so held exactly. */
-const EXACT_DIGITS = 15
+/** Digits that fit 32 bits. */
+const FIRST_DIGITS = 9
 
 /**
  * The number in bytes[from, to), exactly as Number() gives it: a plain decimal, with or without an
  * exponent. NaN where it is anything else (empty, hexadecimal, NaN, Infinity, blanks); infinite where
  * it is too large for a double.
- *
- * Up to 15 digits and a power of ten up to 22 are one correctly rounded multiplication or division
- * of two exact numbers; the rare rest goes through Number().
- * Source: Clinger 1990, How to read floating point numbers accurately (the fast case).
  */
 export function readNumber(bytes: Uint8Array, from: number, to: number): number {
   let at = from
-  const sign = bytes[at]
-  if (at < to && (sign === MINUS || sign === PLUS)) at++
+  const isSigned = at < to && (bytes[at] === MINUS || bytes[at] === PLUS)
+  if (isSigned) at++
 
-  let mantissa = 0
+  const start = at
+  let first = 0
+  let next = 0
   let significant = 0
-  let digits = 0
-  let decimals = 0
-  let byte = 0
+  let point = -1
   for (; at < to; at++) {
-    byte = bytes[at]!
-    if (byte < ZERO || byte > NINE) break
-    mantissa = mantissa * 10 + (byte - ZERO)
-    if (mantissa !== 0) significant++
-    digits++
+    const byte = bytes[at]!
+    if (byte >= ZERO && byte <= NINE) {
+      if (significant < FIRST_DIGITS) {
+        first = (Math.imul(first, 10) + byte - ZERO) | 0
+        if (first !== 0) significant++
+      } else {
+        next = (Math.imul(next, 10) + byte - ZERO) | 0
+        significant++
+      }
+    } else if (byte === POINT && point < 0) point = at
+    else break
   }
-  if (at < to && byte === POINT) {
-    for (at++; at < to; at++) {
-      byte = bytes[at]!
-      if (byte < ZERO || byte > NINE) break
-      mantissa = mantissa * 10 + (byte - ZERO)
-      if (mantissa !== 0) significant++
-      digits++
-      decimals++
-    }
-  }
+  const digits = at - start - (point < 0 ? 0 : 1)
   if (digits === 0) return Number.NaN
 
-  let power = -decimals
+  let power = point < 0 ? 0 : point + 1 - at
   if (at < to) {
     const exponent = readExponent(bytes, at, to)
     if (Number.isNaN(exponent)) return Number.NaN
     power += exponent
   }
-
-  if (significant > EXACT_DIGITS || power < -22 || power > 22) {
-    return Number(String.fromCharCode(...bytes.subarray(from, to)))
-  }
-  const size = power < 0 ? mantissa / EXACT_POWERS[-power]! : mantissa * EXACT_POWERS[power]!
-  return sign === MINUS ? -size : size
+  const size = decimalValue(first, next, significant, power)
+  if (Number.isNaN(size)) return Number(String.fromCharCode(...bytes.subarray(from, to)))
+  return isSigned && bytes[from] === MINUS ? -size : size
 }
 
 /** The exponent that fills bytes[from, to) from its letter on; NaN where that is none. */
