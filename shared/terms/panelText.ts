@@ -7,6 +7,7 @@ import {
 } from './numbers.ts'
 
 type Term = {
+  term: string
   estimate: number
   lower: number
   upper: number
@@ -25,13 +26,21 @@ const decimalsOf = (error: number): number =>
 export function panelTermTexts(term: Term) {
   const decimals = decimalsOf(term.standardError)
   const { oddsRatio, oddsRatioLower, oddsRatioUpper } = term
+  // The odds where every value is 0 mean nothing for a concentration.
+  const isIntercept = term.term === '(Intercept)'
   const oddsDecimals = oddsRatio !== null && Math.abs(oddsRatio - 1) < 0.1 ? 5 : 2
   return {
     estimate: formatEstimate(term.estimate, decimals),
     interval: formatInterval(term.lower, term.upper, decimals),
-    oddsRatio: oddsRatio === null ? NOT_ESTIMABLE : formatEstimate(oddsRatio, oddsDecimals),
+    oddsRatio: isIntercept
+      ? ''
+      : oddsRatio === null
+        ? NOT_ESTIMABLE
+        : formatEstimate(oddsRatio, oddsDecimals),
     oddsInterval:
-      oddsRatioLower === null ? '' : formatInterval(oddsRatioLower, oddsRatioUpper, oddsDecimals),
+      isIntercept || oddsRatioLower === null
+        ? ''
+        : formatInterval(oddsRatioLower, oddsRatioUpper, oddsDecimals),
     p: formatProbability(term.p),
   }
 }

@@ -123,9 +123,9 @@ type Troubled = {
 }
 
 /** How many results are in doubt or missing, and why. */
-export function troubledNote({ zone, index, reference }: Troubled): string {
+export function troubledNote({ zone, index, reference }: Troubled, unit: string): string {
   const doubtful = zone
-    ? `Sensor results from ${formatConcentration(zone.lower)} to ${formatConcentration(zone.upper)} are taken as indeterminate: ${formatCount(index.indeterminatePresent)} with the condition, ${formatCount(index.indeterminateAbsent)} without.`
+    ? `Sensor results from ${formatConcentration(zone.lower)} to ${withUnit(formatConcentration(zone.upper), unit)} are taken as indeterminate: ${formatCount(index.indeterminatePresent)} with the condition, ${formatCount(index.indeterminateAbsent)} without.`
     : 'No sensor result is taken as indeterminate.'
   return `${doubtful} No valid sensor result: ${formatCount(index.noValidPresent)} with the condition, ${formatCount(index.noValidAbsent)} without; they count neither as positive nor as negative. Reference outcome indeterminate: ${formatCount(reference.indexPositive)} with a positive sensor result, ${formatCount(reference.indexNegative)} with a negative one.`
 }

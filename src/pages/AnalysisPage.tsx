@@ -1,8 +1,6 @@
-import { useQuery, useQueryClient } from '@tanstack/react-query'
-import { useEffect } from 'react'
+import { useQuery } from '@tanstack/react-query'
 import { useParams } from 'react-router-dom'
 import type { Analysis } from '#shared/schemas/analysis.ts'
-import { ApiError } from '../api/ApiError.ts'
 import { may, useStudy } from '../api/study.ts'
 import { analysisQuery, analysisRunsQuery } from '../features/analyses/analyses.api.ts'
 import { analysisSub } from '../features/analyses/analysisSub.ts'
@@ -20,16 +18,10 @@ import { SheetSkeleton } from '../ui/Skeleton.tsx'
 export default function AnalysisPage() {
   const study = useStudy()
   const { analysisId = '' } = useParams()
-  const queries = useQueryClient()
-  const analysis = useQuery(analysisQuery(analysisId))
-  const notStored = analysis.error instanceof ApiError && analysis.error.status === 404
-  const runs = useQuery({ ...analysisRunsQuery(study.id), enabled: notStored })
+  // While a run is told of there is nothing stored yet; once it no longer is, there is.
+  const runs = useQuery(analysisRunsQuery(study.id))
   const run = runs.data?.find((each) => each.id === analysisId)
-  const ended = notStored && runs.isFetched && !run
-  useEffect(() => {
-    // A run that is no longer told of has been stored meanwhile.
-    if (ended) void queries.invalidateQueries({ queryKey: analysisQuery(analysisId).queryKey })
-  }, [ended, queries, analysisId])
+  const analysis = useQuery({ ...analysisQuery(analysisId), enabled: runs.isFetched && !run })
   if (analysis.data) return <Stored analysis={analysis.data} />
   return (
     <>
@@ -38,8 +30,6 @@ export default function AnalysisPage() {
         <Sheet>
           <RunStatus studyId={study.id} run={run} />
         </Sheet>
-      ) : notStored && runs.isPending ? (
-        <SheetSkeleton />
       ) : analysis.error ? (
         <ErrorNotice
           what="The analysis could not be read"

@@ -24,7 +24,7 @@ export function AccuracyMoreView({ result }: { result: AccuracyResult }) {
         </div>
       )}
       <ChosenCutOffs rules={rules} corrections={corrections} unit={unitLabel(result.unit)} />
-      {troubled && <TroubledTable troubled={troubled} />}
+      {troubled && <TroubledTable troubled={troubled} unit={unitLabel(result.unit)} />}
       {subgroupTables.map((table) => (
         <SubgroupForest key={table.by} table={table} />
       ))}

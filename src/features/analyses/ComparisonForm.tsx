@@ -68,12 +68,20 @@ type ComparisonFormProps = {
 const divisionName = ({ by }: DatasetGroups[number]) =>
   by.kind === 'covariate' ? by.name : by.kind === 'site' ? 'Site' : 'Sex'
 
+/** Others are compared with the primary biomarker, so it comes first. */
+function primaryFirst({ manifest, protocol }: Dataset): Dataset['manifest']['analytes'] {
+  const isPrimary = ({ key }: { key: string }) => key === protocol.primaryAnalyteKey
+  return [
+    ...manifest.analytes.filter(isPrimary),
+    ...manifest.analytes.filter((each) => !isPrimary(each)),
+  ]
+}
+
 /** Which areas to compare, in the same subjects or in two groups; computed and stored in one. */
 export function ComparisonForm({ dataset, groups, onStore, onStored }: ComparisonFormProps) {
-  const { analytes } = dataset.manifest
+  const analytes = primaryFirst(dataset)
   const directionOf = (key: string): Direction => plannedDirection(dataset, key) ?? 'higher'
-  const primary = dataset.protocol.primaryAnalyteKey
-  const first = analytes.find(({ key }) => key === primary)?.key ?? analytes[0]?.key ?? ''
+  const first = analytes[0]?.key ?? ''
   const defaults: ComparisonChoice = {
     title: `Comparison against ${dataset.protocol.targetCondition}`,
     design: analytes.length > 1 ? 'paired' : 'independent',
@@ -134,7 +142,7 @@ function PairedFields({ dataset, permute }: { dataset: Dataset; permute: boolean
   return (
     <>
       <FormSection title="Biomarkers, two to four">
-        {dataset.manifest.analytes.map(({ key, name }) => (
+        {primaryFirst(dataset).map(({ key, name }) => (
           <FieldRow key={key}>
             <CheckField name={`markers.${key}.chosen`} label={name} />
             <SelectField

@@ -5,7 +5,7 @@ import { Facts } from '../../ui/Facts.tsx'
 import { StaticTable } from '../../ui/StaticTable.tsx'
 
 /** Results in doubt counted either way, and subjects without a result. */
-export function TroubledTable({ troubled }: { troubled: TroubledResults }) {
+export function TroubledTable({ troubled, unit }: { troubled: TroubledResults; unit: string }) {
   const { index, reference } = troubled
   const table = (caption: string, scenarios: TroubledResults['index']['scenarios']) => (
     <StaticTable
@@ -25,9 +25,10 @@ export function TroubledTable({ troubled }: { troubled: TroubledResults }) {
   return (
     <section aria-label="Results in doubt" className="mt-6 border-t border-rule pt-5">
       <h2>Results in doubt, and results that are not there</h2>
-      <p className="mb-3 text-sm">{troubledNote(troubled)}</p>
-      {table('Indeterminate sensor results', index.scenarios)}
-      {table('Indeterminate reference outcomes', reference.scenarios)}
+      <p className="mb-3 text-sm">{troubledNote(troubled, unit)}</p>
+      {troubled.zone && table('Indeterminate sensor results', index.scenarios)}
+      {reference.indexPositive + reference.indexNegative > 0 &&
+        table('Indeterminate reference outcomes', reference.scenarios)}
       <div className="mt-4">
         <Facts
           layout="rows"

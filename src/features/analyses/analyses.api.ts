@@ -47,7 +47,11 @@ export function useAskForRun(studyId: string) {
   return useMutation({
     mutationFn: (body: AnalysisRequest) =>
       request(analysisRun, 'post', `/api/studies/${studyId}/analysis-runs`, { body }),
-    onSuccess: () => queries.invalidateQueries({ queryKey: studyKey(studyId) }),
+    onSuccess: (asked) => {
+      // Its page must know of it at once, or it would look for a result.
+      queries.setQueryData(analysisRunsQuery(studyId).queryKey, (known = []) => [asked, ...known])
+      return queries.invalidateQueries({ queryKey: studyKey(studyId) })
+    },
   })
 }
 

@@ -7,6 +7,7 @@ import type {
 } from '#shared/schemas/accuracyMore.ts'
 import type { AccuracyResult } from '#shared/schemas/analysis.ts'
 import { SCENARIO_LABELS, SUBGROUPING_LABELS } from '#shared/terms/analysis.ts'
+import { unitLabel } from '#shared/terms/gases.ts'
 import {
   formatCount,
   formatEstimate,
@@ -21,12 +22,25 @@ export const accuracyMoreBlocks = ({
   troubled,
   subgroupTables = [],
   more,
+  unit,
 }: AccuracyResult): ReportBlock[] => [
   ...(success ? successBlocks(success) : []),
-  ...(troubled ? troubledBlocks(troubled) : []),
+  ...(troubled ? troubledBlocks(troubled, unitLabel(unit)) : []),
   ...subgroupTables.map(subgroupBlock),
+  ...(subgroupTables.length > 0
+    ? [
+        {
+          kind: 'paragraph' as const,
+          quiet: true,
+          text: 'Whether groups differ takes a comparison of their own, not a look at two intervals.',
+        },
+      ]
+    : []),
   ...(more ? moreBlocks(more) : []),
 ]
+
+/** The interval under its estimate, where columns are narrow. */
+const inTwoLines = (text: string): string => text.replace(' (', '\n(')
 
 function successBlocks({ met, parts }: SuccessVerdict): ReportBlock[] {
   return [
@@ -35,7 +49,7 @@ function successBlocks({ met, parts }: SuccessVerdict): ReportBlock[] {
   ]
 }
 
-function troubledBlocks(troubled: TroubledResults): ReportBlock[] {
+function troubledBlocks(troubled: TroubledResults, unit: string): ReportBlock[] {
   const { index, reference } = troubled
   const columns = [
     { label: 'Results in doubt' },
@@ -45,18 +59,22 @@ function troubledBlocks(troubled: TroubledResults): ReportBlock[] {
   const rowsOf = (scenarios: TroubledResults['index']['scenarios']) =>
     scenarios.map(({ key, sensitivity, specificity }) => [
       SCENARIO_LABELS[key],
-      proportionText(sensitivity),
-      proportionText(specificity),
+      inTwoLines(proportionText(sensitivity)),
+      inTwoLines(proportionText(specificity)),
     ])
   return [
     { kind: 'subheading', text: 'Results in doubt, and results that are not there' },
-    { kind: 'paragraph', quiet: true, text: troubledNote(troubled) },
-    {
-      kind: 'table',
-      caption: 'Indeterminate sensor results',
-      columns,
-      rows: rowsOf(index.scenarios),
-    },
+    { kind: 'paragraph', quiet: true, text: troubledNote(troubled, unit) },
+    ...(troubled.zone
+      ? [
+          {
+            kind: 'table' as const,
+            caption: 'Indeterminate sensor results',
+            columns,
+            rows: rowsOf(index.scenarios),
+          },
+        ]
+      : []),
     {
       kind: 'keyValues',
       pairs: [
@@ -64,18 +82,22 @@ function troubledBlocks(troubled: TroubledResults): ReportBlock[] {
         { label: 'With a valid result', value: proportionText(index.valid) },
       ],
     },
-    {
-      kind: 'table',
-      caption: 'Indeterminate reference outcomes',
-      columns,
-      rows: rowsOf(reference.scenarios),
-    },
+    ...(reference.indexPositive + reference.indexNegative > 0
+      ? [
+          {
+            kind: 'table' as const,
+            caption: 'Indeterminate reference outcomes',
+            columns,
+            rows: rowsOf(reference.scenarios),
+          },
+        ]
+      : []),
   ]
 }
 
 const subgroupBlock = ({ by, rows }: SubgroupTable): ReportBlock => ({
   kind: 'table',
-  caption: `By ${SUBGROUPING_LABELS[by].toLowerCase()}. Differences between groups need a comparison of their own, not a look at two intervals.`,
+  caption: `By ${SUBGROUPING_LABELS[by].toLowerCase()}`,
   columns: [
     { label: SUBGROUPING_LABELS[by] },
     { label: 'Present', align: 'right' },
@@ -89,10 +111,10 @@ const subgroupBlock = ({ by, rows }: SubgroupTable): ReportBlock => ({
     formatCount(present),
     formatCount(absent),
     area
-      ? `${formatEstimate(area.estimate)} (${formatInterval(area.lower, area.upper)})`
+      ? `${formatEstimate(area.estimate)}\n(${formatInterval(area.lower, area.upper)})`
       : 'counts only',
-    sensitivity ? proportionText(sensitivity) : '',
-    specificity ? proportionText(specificity) : '',
+    sensitivity ? inTwoLines(proportionText(sensitivity)) : '',
+    specificity ? inTwoLines(proportionText(specificity)) : '',
   ]),
 })
 
@@ -107,9 +129,9 @@ function moreBlocks({ figures, note }: MoreOnArea): ReportBlock[] {
         { label: 'p', align: 'right' },
         { label: 'Method and source' },
       ],
-      rows: figures.map(({ label, value, p, method, source }) => [
+      rows: figures.map(({ key, label, value, p, method, source }) => [
         label,
-        formatEstimate(value),
+        formatEstimate(value, key === 'mannWhitney' ? 1 : 3),
         p === null ? '' : formatProbability(p),
         `${method}\n${source}`,
       ]),
