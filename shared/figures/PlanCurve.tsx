@@ -50,7 +50,8 @@ export function PlanCurve({ id, curve, width = 470, theme = figureThemes.light }
       ))}
       <BottomAxis
         plot={plot}
-        ticks={roundTicks(axes.x, x, widthOf(plot))}
+        // Short numbers stand closer than concentrations do.
+        ticks={roundTicks(axes.x, x, 1.6 * widthOf(plot))}
         label={axisLabel(curve.x, axes.x)}
         theme={theme}
       />
