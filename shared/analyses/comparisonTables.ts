@@ -31,9 +31,9 @@ export function fittedLinesTable(
     columns: [
       { header: 'Line' },
       { header: `Intercept${at.unit ? ` (${at.unit})` : ''}`, numeric: true },
-      { header: intervalHeading(at.confidence), numeric: true },
+      { header: `${intervalHeading(at.confidence)} of the intercept`, numeric: true },
       { header: 'Slope', numeric: true },
-      { header: intervalHeading(at.confidence), numeric: true },
+      { header: `${intervalHeading(at.confidence)} of the slope`, numeric: true },
     ],
     rows: lines.map(({ line, intercept, slope }) => [
       FITTED_LINE_LABELS[line],

@@ -1,7 +1,7 @@
 import type { DifferencePlotProps } from '#shared/figures/DifferencePlot.tsx'
 import type { AgreementLine } from '#shared/figures/differencePlotTypes.ts'
 import type { AgreementFigures, AgreementLineFigures } from '#shared/schemas/agreement.ts'
-import { DIFFERENCE_LABELS } from '#shared/terms/agreementTerms.ts'
+import { DIFFERENCE_LABELS, MIDDLE_LINE_LABELS } from '#shared/terms/agreementTerms.ts'
 import { unitLabel } from '#shared/terms/gases.ts'
 import type { AgreementPairs } from './agreementPairs.ts'
 import { heightAt } from './outsideLimits.ts'
@@ -28,6 +28,11 @@ export function differencePlotOf(
     upperLimit: drawn(figures.upperLimit, centre),
     unit,
     differenceLabel: DIFFERENCE_LABELS[scale],
+    lineNames: {
+      upper: 'Upper limit',
+      middle: scale === 'regression' ? 'Bias' : MIDDLE_LINE_LABELS[scale],
+      lower: 'Lower limit',
+    },
     noDifference: scale === 'ratio' ? 1 : 0,
     ...(differenceUnit === null ? {} : { differenceUnit: unitLabel(differenceUnit) }),
     ...(acceptance ? { acceptance } : {}),

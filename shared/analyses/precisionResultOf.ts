@@ -10,6 +10,7 @@ import { intraclassCorrelations } from '#shared/statistics/agreement/intraclassC
 import { type Repeatability, repeatability } from '#shared/statistics/agreement/repeatability.ts'
 import { StatisticsError } from '#shared/statistics/StatisticsError.ts'
 import { replicatesForReliability } from '#shared/statistics/sensor/replicatesForReliability.ts'
+import { formatCount } from '#shared/terms/numbers.ts'
 import { frozenAnalyteOf } from './frozenAnalyteOf.ts'
 import { noiseCostOf, type StoredArea } from './noiseCostOf.ts'
 import { readingGroups } from './readingGroups.ts'
@@ -38,6 +39,11 @@ export function precisionResultOf(
   const { analyteKey, measuredBy, confidence: level, reliabilityWanted } = parameters
   const { name, unit } = frozenAnalyteOf(manifest.analytes, analyteKey)
   const { groups, counts } = readingGroups(rows, analyteKey, measuredBy)
+  if (groups.length > 0 && counts.severalSessions === 0)
+    throw new StatisticsError(
+      'too-few',
+      `Each of the ${formatCount(groups.length)} subjects has a value in one session only, so how readings repeat from session to session cannot be told. It takes subjects with a second session.`,
+    )
   const found = repeatability(groups, { level })
   const withinVariance = found.withinSubjectSd ** 2
   return {

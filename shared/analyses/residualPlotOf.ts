@@ -26,7 +26,7 @@ export function residualPlotOf(
     bias: { intercept: 0 },
     lowerLimit: { intercept: -half },
     upperLimit: { intercept: half },
-    lineNames: { upper: '95 % below', middle: 'The line', lower: '95 % above' },
+    lineNames: { upper: 'Upper 95 %', middle: 'Fitted line', lower: 'Lower 95 %' },
     meanLabel: 'Reference',
     differenceLabel: `Sensor − ${label} line`,
   }

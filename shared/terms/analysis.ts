@@ -167,7 +167,7 @@ export const ACCEPTANCE_VERDICT_WORDS: Record<AcceptanceVerdict, string> = {
   within:
     'Both limits of agreement and their intervals lie within the acceptance limits: the sensor agrees closely enough.',
   notShown:
-    'Both limits of agreement lie within the acceptance limits, but an interval reaches beyond them: with this number of pairs it is not shown that the sensor agrees closely enough.',
+    'Both limits of agreement lie within the acceptance limits, but an interval reaches beyond them or cannot be given: with this number of pairs it is not shown that the sensor agrees closely enough.',
   beyond:
     'A limit of agreement lies beyond the acceptance limits: the sensor does not agree closely enough.',
 }

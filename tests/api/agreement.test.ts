@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
 import { type Api, aKey, startApi } from '../support/api.ts'
 import { fillStudy, type GivenSubject, lockThroughHttp, teamOf } from '../support/earlierData.ts'
+import { inOneLine, pdfPages } from '../support/pdfText.ts'
 import { hasReference, referenceRows, referenceValue } from '../support/referenceFolder.ts'
 
 let api: Api
@@ -158,6 +159,9 @@ describe('the scale of the limits', () => {
         [line, line - half, line + half],
       )
     }
+    // At the mean of the means the line's error is its residual SD over √n; t(15) by R's qt.
+    const half = (2.131449545559774 * 39.89603418283774) / Math.sqrt(17)
+    expect(alongMean[1].bias.upper - alongMean[1].bias.estimate).toBeCloseTo(half, 7)
     expect(slopeOnMean.p).toBeCloseTo(0.7494985336492939, 9)
     expect(body.result.acceptance.verdict).toBe('beyond')
     expect(body.asProtocol).toBe(false)
@@ -319,7 +323,7 @@ describe('precision', () => {
     const single = await aLockedStudy(ONCE)
     const refused = await single.run(precision())
     expect([refused.status, refused.body.code]).toEqual([422, 'statistics-refused'])
-    expect(refused.body.message).toContain('second reading')
+    expect(refused.body.message).toContain('second session')
   })
 
   test('says what the noise costs a stored area, and refuses an area that is not of this dataset and analyte', async () => {
@@ -400,6 +404,69 @@ describe('two different measurands', () => {
       .expect(200)
     expect(pairs.body).toMatchObject({ referenceKey: 'acetone', counts: { pairs: 8 } })
     expect(pairs.body.subjectIds).toHaveLength(8)
+  })
+})
+
+describe('in print', () => {
+  test('the closed part says the same figures as the stored results, method and source with them', async () => {
+    const { run, study, analyst, datasetId } = await aLockedStudy(TWICE)
+    const stored = [
+      await run(agreement({ sessionRule: 'every', trueValue: 'varying' })),
+      await run(agreement({ scale: 'ratio', decisionLevels: [300] })),
+      await run({
+        kind: 'precision',
+        analyteKey: 'ammonia',
+        measuredBy: 'sensor',
+        confidence: 0.95,
+        reliabilityWanted: 0.99,
+        accuracyId: null,
+      }),
+      await run({
+        kind: 'correlation',
+        analyteKey: 'ammonia',
+        referenceKey: 'ammonia',
+        sessionRule: 'first',
+        confidence: 0.95,
+      }),
+    ]
+    const asked = await api
+      .as(analyst)
+      .post(`/api/studies/${study.id}/reports`)
+      .send({
+        id: aKey(),
+        title: 'Meters',
+        datasetId,
+        analysisIds: stored.map(({ body }) => body.id),
+      })
+      .expect(202)
+    await api.runJobs()
+    const closed = await api
+      .as(analyst)
+      .get(`/api/reports/${asked.body.id}/closed.pdf`)
+      .buffer(true)
+      .parse((stream, done) => {
+        const pieces: Buffer[] = []
+        stream.on('data', (piece: Buffer) => pieces.push(piece))
+        stream.on('end', () => done(null, Buffer.concat(pieces)))
+      })
+      .expect(200)
+    const text = inOneLine(await pdfPages(closed.body))
+    // The figures are those that the tests above hold against R.
+    for (const words of [
+      'Upper limit 67.7 46.1 to 103.5',
+      'Lower limit −79.8 −115.6 to −58.2',
+      'true value varies, MOVER (Zou)',
+      'Zou 2013, Stat Methods Med Res 22:630',
+      'Mean ratio 0.988 0.928 to 1.052',
+      'Lower limit 0.778 0.673 to 0.842',
+      'Deming −15.7',
+      '0.744 to 1.316',
+      'Within-subject SD 15.3 ppb 11.5 to 22.9',
+      'ICC(1,1), one session, one-way 0.983',
+      'The mean of 2 sessions',
+      'Rank correlation 0.900',
+    ])
+      expect(text).toContain(words)
   })
 })
 

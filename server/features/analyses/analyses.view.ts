@@ -19,13 +19,16 @@ export function toAnalysisSummary(row: AnalysisSummaryRow): AnalysisSummary {
   }
 }
 
-export const toAnalysis = (row: AnalysisRow): Analysis => ({
-  ...row,
-  ...toAnalysisSummary(row),
-  parameters: analysisParameters.parse(row.parameters),
-  result: analysisResult.parse(JSON.parse(row.result)),
-  asProtocol: asProtocol(row.protocol, row.parameters),
-  targetCondition: row.protocol.targetCondition,
-  referenceStandard: row.protocol.referenceStandard,
-  frozenAt: row.frozenAt.toISOString(),
-})
+export function toAnalysis(row: AnalysisRow): Analysis {
+  const parameters = analysisParameters.parse(row.parameters)
+  return {
+    ...row,
+    ...toAnalysisSummary(row),
+    parameters,
+    result: analysisResult.parse(JSON.parse(row.result)),
+    asProtocol: asProtocol(row.protocol, parameters),
+    targetCondition: row.protocol.targetCondition,
+    referenceStandard: row.protocol.referenceStandard,
+    frozenAt: row.frozenAt.toISOString(),
+  }
+}

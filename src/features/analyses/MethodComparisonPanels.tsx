@@ -21,6 +21,10 @@ import { ResultTableView } from './ResultTableView.tsx'
 type PanelsProps = { shown: AgreementShown; provenance: readonly string[]; settings?: ReactNode }
 type PlotProps = Pick<PanelsProps, 'shown' | 'provenance'> & { fit: ScatterFit | null }
 
+const NOT_FITTED = 'That line could not be fitted; the table below says why.'
+const STORED_WITHOUT =
+  'This analysis was stored by a build that fitted no lines. Explore it again to see them.'
+
 const LINE_OPTIONS = FITTED_LINES.map((value) => ({ value, label: FITTED_LINE_LABELS[value] }))
 
 /** Sensor against reference with a line and its residuals, the lines, bias at levels, correlations. */
@@ -45,7 +49,7 @@ export function MethodComparisonPanels({ shown, provenance, settings }: PanelsPr
           <Residuals shown={shown} provenance={provenance} fit={fit} />
         ) : (
           <p className="text-sm">
-            {comparisonWithheld ?? 'That line could not be fitted; the table below says why.'}
+            {comparison ? NOT_FITTED : (comparisonWithheld ?? STORED_WITHOUT)}
           </p>
         )}
       </div>

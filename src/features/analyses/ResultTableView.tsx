@@ -7,13 +7,11 @@ export function ResultTableView({ table }: { table: ResultTable | string | null 
   if (typeof table === 'string') return <p className="mt-3 text-sm">{table}</p>
   return (
     <div className="min-w-0">
-      <div className="overflow-x-auto">
-        <StaticTable
-          caption={table.caption}
-          columns={table.columns}
-          rows={table.rows.map((cells) => ({ key: cells[0]!, cells }))}
-        />
-      </div>
+      <StaticTable
+        caption={table.caption}
+        columns={table.columns}
+        rows={table.rows.map((cells) => ({ key: cells[0]!, cells }))}
+      />
       <div className="mt-2 space-y-1.5 text-sm text-ink-2">
         {table.notes.map((note) => (
           <p key={note}>{note}</p>
