@@ -33,7 +33,7 @@ export function ErrorSummary({ ref, message, requestId, entries }: ErrorSummaryP
       )}
       {entries.length > 0 && (
         <ul className="mt-1 list-disc pl-5">
-          {entries.map(({ name, message: sentence }) => (
+          {inOrderOfPage(entries, idOf).map(({ name, message: sentence }) => (
             <li key={name}>
               <a
                 href={`#${idOf(name)}`}
@@ -51,6 +51,23 @@ export function ErrorSummary({ ref, message, requestId, entries }: ErrorSummaryP
       )}
     </div>
   )
+}
+
+/** The schema lists its fields in an order of its own; the person reads the page from the top. */
+function inOrderOfPage(
+  entries: readonly SummaryEntry[],
+  idOf: (name: string) => string,
+): SummaryEntry[] {
+  const placed = entries.map((entry) => ({
+    entry,
+    control: document.getElementById(idOf(entry.name)),
+  }))
+  placed.sort((a, b) => {
+    if (!a.control || !b.control) return Number(a.control === null) - Number(b.control === null)
+    const follows = Node.DOCUMENT_POSITION_FOLLOWING
+    return (a.control.compareDocumentPosition(b.control) & follows) === 0 ? 1 : -1
+  })
+  return placed.map(({ entry }) => entry)
 }
 
 /** A field in a folded section is unfolded first. */

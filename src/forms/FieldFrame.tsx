@@ -1,7 +1,7 @@
-import { type ReactNode, useEffect } from 'react'
+import { type ReactNode, useContext, useEffect } from 'react'
 import { type FieldError, get, useFormContext } from 'react-hook-form'
 import { classes } from '../ui/classes.ts'
-import { useFormParts } from './formContext.ts'
+import { EntryName, useFormParts } from './formContext.ts'
 
 /** What every field can be given. */
 export type FieldProps = {
@@ -29,17 +29,18 @@ type FieldFrameProps = FieldProps & {
 /** Tells the form what the field is called, and the field what is wrong with it. */
 export function useFieldState({ name, label, hint }: FieldProps) {
   const { idOf, labels } = useFormParts()
+  const entry = useContext(EntryName)
   const { formState } = useFormContext()
   const error: FieldError | undefined = get(formState.errors, name)
   const message = error?.message
   const id = idOf(name)
 
   useEffect(() => {
-    labels.set(name, label)
+    labels.set(name, entry === null ? label : `${entry}, ${label}`)
     return () => {
       labels.delete(name)
     }
-  }, [labels, name, label])
+  }, [labels, name, label, entry])
 
   const describedBy =
     classes(hint !== undefined && `${id}-hint`, message && `${id}-error`) || undefined

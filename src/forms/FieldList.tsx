@@ -3,7 +3,7 @@ import { type FieldError, get, useFormContext } from 'react-hook-form'
 import { Button } from '../ui/Button.tsx'
 import { LinkButton } from '../ui/LinkButton.tsx'
 import { FieldMessage } from './FieldFrame.tsx'
-import { useFormParts } from './formContext.ts'
+import { EntryName, useFormParts } from './formContext.ts'
 
 type FieldListProps = {
   /** Path of the list in the form's values. */
@@ -58,7 +58,9 @@ export function FieldListEntry({ label, children, onRemove }: FieldListEntryProp
   return (
     <fieldset className="relative min-w-0 border-l-2 border-rule py-1 pl-4">
       <legend className="sr-only">{label}</legend>
-      <div className="flex flex-col gap-4">{children}</div>
+      <div className="flex flex-col gap-4">
+        <EntryName value={label}>{children}</EntryName>
+      </div>
       {onRemove && (
         <LinkButton className="mt-2 text-sm" onClick={onRemove}>
           Take out<span className="sr-only"> {label}</span>

@@ -11,6 +11,9 @@ export type FormParts = {
 
 export const FormContext = createContext<FormParts | null>(null)
 
+/** What the entry of a list that a field stands in is called: "Site 2". */
+export const EntryName = createContext<string | null>(null)
+
 export function useFormParts(): FormParts {
   const parts = useContext(FormContext)
   if (!parts) throw new Error('A field stands outside of a Form')
