@@ -3,6 +3,7 @@ import { Link } from 'react-router-dom'
 import type { Role } from '#shared/policy/people.ts'
 import { meQuery } from '../api/me.ts'
 import { signOut } from '../api/signOut.ts'
+import { useLeaveAfterAsking } from '../forms/UnsavedWork.tsx'
 import { BreathMark } from './BreathMark.tsx'
 import { useNightTheme } from './nightTheme.ts'
 import { SavedState } from './SavedState.tsx'
@@ -33,6 +34,7 @@ export function Band({ study, roles }: BandProps) {
   const me = useQuery(meQuery)
   const [night, setNight] = useNightTheme()
   const leave = useMutation({ mutationFn: signOut, meta: { quiet: true } })
+  const leaveAfterAsking = useLeaveAfterAsking()
   return (
     <header className="flex min-h-12 flex-wrap items-center gap-x-5 gap-y-1.5 bg-band px-7 py-2 text-band-ink max-wide:px-4 print:hidden [&_:focus-visible]:outline-band-ink">
       <Link
@@ -70,7 +72,7 @@ export function Band({ study, roles }: BandProps) {
         </button>
         <button
           type="button"
-          onClick={() => leave.mutate()}
+          onClick={() => leaveAfterAsking(() => leave.mutateAsync())}
           disabled={leave.isPending}
           className="min-h-6 text-band-ink underline underline-offset-2"
         >

@@ -1,11 +1,13 @@
 import { useMutationState, useQueryClient } from '@tanstack/react-query'
 import { useEffect } from 'react'
 import { useLocation } from 'react-router-dom'
+import { useHasUnsavedWork } from '../forms/UnsavedWork.tsx'
 import { classes } from '../ui/classes.ts'
 
 /** Whether everything that the person entered has reached the server. */
 export function SavedState() {
   useForgetFailuresOnLeaving()
+  const unsaved = useHasUnsavedWork()
   const writes = useMutationState({
     filters: { predicate: (mutation) => mutation.meta?.quiet !== true },
     select: ({ state }) => ({
@@ -26,11 +28,21 @@ export function SavedState() {
         aria-hidden="true"
         className={classes(
           'size-2 flex-none rounded-full',
-          failed ? 'bg-[var(--failed)]' : saving ? 'bg-[var(--held)]' : 'bg-[var(--saved)]',
+          failed
+            ? 'bg-[var(--failed)]'
+            : saving || unsaved
+              ? 'bg-[var(--held)]'
+              : 'bg-[var(--saved)]',
         )}
       />
       <span className="min-w-0 truncate" title={failed ? latest?.message : undefined}>
-        {failed ? `Not saved: ${latest?.message}` : saving ? 'Saving…' : 'All saved'}
+        {failed
+          ? `Not saved: ${latest?.message}`
+          : saving
+            ? 'Saving…'
+            : unsaved
+              ? 'Not saved yet'
+              : 'All saved'}
       </span>
     </span>
   )
