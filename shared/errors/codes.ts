@@ -15,6 +15,7 @@ export const ERROR_CODES = {
   'too-large': [413, 'This is too large.'],
   'unsupported-type': [415, 'This type of content is not accepted here.'],
   invalid: [422, 'Some entries need attention.'],
+  'nothing-differs': [422, 'Nothing differs from what is stored.'],
   'reason-required': [422, 'Say why this saved record changes.'],
   'unreadable-file': [422, 'The file could not be read.'],
   'statistics-refused': [422, 'The figures cannot be computed from these data.'],

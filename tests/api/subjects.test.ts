@@ -132,6 +132,19 @@ describe('correcting a subject', () => {
     const now = await client.get(`/api/subjects/${body.id}`)
     expect(now.body.sex).toBe('M')
   })
+
+  test('that changes nothing is refused in words, and leaves no event', async () => {
+    const { study, client } = await bedsideAtNorth()
+    const { body } = await client.post(`/api/sites/${study.north.id}/subjects`).send(aSubject())
+    const before = await api.auditEvents(study.id)
+    const { sex, ageBand } = body
+    const response = await client
+      .patch(`/api/subjects/${body.id}`)
+      .send({ sex, ageBand, version: 1, reasonForChange: 'Misread' })
+    expect(response.status).toBe(422)
+    expect(response.body.message).toBe('Nothing differs from what is stored.')
+    expect(await api.auditEvents(study.id)).toHaveLength(before.length)
+  })
 })
 
 describe('listing subjects', () => {

@@ -30,7 +30,8 @@ export async function correctSite(
       others.filter((each) => each.id !== siteId),
       values,
     )
-    await tx.update(sites, siteId, values, version)
+    const differs = await tx.update(sites, siteId, values, version)
+    if (!differs) throw new AppError('nothing-differs')
   })
   return getSite(reader(), siteId)
 }

@@ -3,6 +3,7 @@ import { subjects } from '#db/schema/subjects.ts'
 import type { Actor } from '#server/changes/actor.ts'
 import { change } from '#server/changes/change.ts'
 import { getSite } from '#server/features/sites/sites.reads.ts'
+import { AppError } from '#shared/errors/AppError.ts'
 import type { SubjectCorrection, SubjectInput } from '#shared/schemas/subject.ts'
 import { randomSubjectCode, takenCodes } from './subjectCodes.reads.ts'
 import { getSubject, type SubjectRow } from './subjects.reads.ts'
@@ -29,14 +30,15 @@ export async function enrolSubject(
   return getSubject(reader(), input.id)
 }
 
-/** Corrects what was recorded of a subject; refused when somebody changed it meanwhile. */
+/** Corrects what was recorded of a subject; refused when somebody changed it meanwhile or nothing differs. */
 export async function correctSubject(
   actor: Actor,
   subjectId: string,
   { version, reasonForChange: reason, ...values }: SubjectCorrection,
 ): Promise<SubjectRow> {
-  await change({ actor, action: 'subject.correct', of: { subjectId }, reason }, (tx) =>
-    tx.update(subjects, subjectId, values, version),
-  )
+  await change({ actor, action: 'subject.correct', of: { subjectId }, reason }, async (tx) => {
+    const differs = await tx.update(subjects, subjectId, values, version)
+    if (!differs) throw new AppError('nothing-differs')
+  })
   return getSubject(reader(), subjectId)
 }
