@@ -1,6 +1,7 @@
-import type { ReactNode } from 'react'
+import { type ReactNode, useState } from 'react'
 import { ApiError } from '../api/ApiError.ts'
 import { Button } from '../ui/Button.tsx'
+import { ErrorNotice } from '../ui/ErrorNotice.tsx'
 import { Notice } from '../ui/Notice.tsx'
 import { StaticTable } from '../ui/StaticTable.tsx'
 
@@ -8,18 +9,34 @@ type ChangedMeanwhileProps = {
   /** "this subject" */
   what: string
   rows: readonly { label: string; mine: ReactNode; stored: ReactNode }[]
-  /** The person saw what is stored now and keeps their own. */
-  onKeepMine: () => void
+  /** The person saw what is stored now and keeps their own; throws where that is refused. */
+  onKeepMine: () => Promise<unknown>
   /** The person gives their own up. */
   onKeepStored: () => void
 }
 
 /** Both versions side by side, after somebody else was quicker. */
 export function ChangedMeanwhile({ what, rows, onKeepMine, onKeepStored }: ChangedMeanwhileProps) {
+  const [saving, setSaving] = useState(false)
+  const [refusal, setRefusal] = useState<Error | null>(null)
+  const keepMine = async () => {
+    setSaving(true)
+    setRefusal(null)
+    try {
+      await onKeepMine()
+    } catch (error) {
+      setRefusal(error as Error)
+    } finally {
+      setSaving(false)
+    }
+  }
   return (
     <div className="mb-5">
       <Notice tone="warn" title={`Somebody changed ${what} meanwhile`} announce>
-        <p>Nothing of yours is stored yet. Look at both and choose.</p>
+        <p>
+          Nothing of yours is stored yet. What you did not change stands as it is stored now. Look
+          at both and choose.
+        </p>
         <div className="mt-2 rounded-[3px] bg-sheet text-ink">
           <StaticTable
             caption="Your version and the stored one"
@@ -30,8 +47,9 @@ export function ChangedMeanwhile({ what, rows, onKeepMine, onKeepStored }: Chang
             }))}
           />
         </div>
+        {refusal && <ErrorNotice what="Yours was not saved" error={refusal} />}
         <div className="mt-3 flex flex-wrap gap-2">
-          <Button size="small" onClick={onKeepMine}>
+          <Button size="small" busy={saving && 'Saving…'} onClick={() => void keepMine()}>
             Put mine in its place
           </Button>
           <Button kind="quiet" size="small" onClick={onKeepStored}>

@@ -1,8 +1,10 @@
 import { useState } from 'react'
+import type { z } from 'zod'
 import { type Site, siteCorrection } from '#shared/schemas/site.ts'
 import { ChangedMeanwhile, isChangedMeanwhile } from '../../forms/ChangedMeanwhile.tsx'
 import { Form } from '../../forms/Form.tsx'
 import { ReasonField } from '../../forms/ReasonField.tsx'
+import { rebased } from '../../forms/rebased.ts'
 import { Dialog } from '../../ui/Dialog.tsx'
 import { SiteFields } from './SiteFields.tsx'
 import { useCorrectSite } from './sites.api.ts'
@@ -20,26 +22,32 @@ type CorrectSiteDialogProps = {
 export function CorrectSiteDialog({ studyId, site, onClose }: CorrectSiteDialogProps) {
   const [seen] = useState(site)
   const correct = useCorrectSite(studyId)
-  const mine = correct.variables?.body
-  const overtaken = isChangedMeanwhile(correct.error) && site.version !== seen.version
+  const [mine, setMine] = useState<z.output<typeof correction> | null>(null)
+  const save = (values: z.output<typeof correction>) =>
+    correct
+      .mutateAsync({ siteId: site.id, body: { ...values, version: seen.version } })
+      .catch((error) => {
+        setMine(isChangedMeanwhile(error) ? values : null)
+        throw error
+      })
+  const onTop = mine && site.version !== seen.version ? rebased(mine, seen, site) : null
   return (
     <Dialog open title={`Correct ${seen.name}`} onClose={onClose} wide>
-      {overtaken && mine && (
+      {onTop && (
         <ChangedMeanwhile
           what="this site"
           rows={[
-            { label: 'Site', mine: mine.name, stored: site.name },
+            { label: 'Site', mine: onTop.name, stored: site.name },
             {
               label: 'Planned subjects',
-              mine: mine.plannedSubjects ?? 'none',
+              mine: onTop.plannedSubjects ?? 'none',
               stored: site.plannedSubjects ?? 'none',
             },
           ]}
           onKeepMine={() =>
-            correct.mutate(
-              { siteId: site.id, body: { ...mine, version: site.version } },
-              { onSuccess: onClose },
-            )
+            correct
+              .mutateAsync({ siteId: site.id, body: { ...onTop, version: site.version } })
+              .then(onClose)
           }
           onKeepStored={onClose}
         />
@@ -53,9 +61,7 @@ export function CorrectSiteDialog({ studyId, site, onClose }: CorrectSiteDialogP
         }}
         submitLabel="Save the correction"
         guard={false}
-        onSubmit={(values) =>
-          correct.mutateAsync({ siteId: site.id, body: { ...values, version: seen.version } })
-        }
+        onSubmit={save}
         onSaved={onClose}
         onCancel={onClose}
       >

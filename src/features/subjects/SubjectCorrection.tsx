@@ -1,8 +1,10 @@
 import { useState } from 'react'
+import type { z } from 'zod'
 import { type Subject, subjectCorrection } from '#shared/schemas/subject.ts'
 import { ChangedMeanwhile, isChangedMeanwhile } from '../../forms/ChangedMeanwhile.tsx'
 import { Form } from '../../forms/Form.tsx'
 import { ReasonField } from '../../forms/ReasonField.tsx'
+import { rebased } from '../../forms/rebased.ts'
 import { SubjectFields } from './SubjectFields.tsx'
 import { useCorrectSubject } from './subjects.api.ts'
 import { ageBandWords, sexWords } from './subjectWords.ts'
@@ -20,23 +22,28 @@ type SubjectCorrectionProps = {
 export function SubjectCorrection({ studyId, subject, onDone }: SubjectCorrectionProps) {
   const [seen] = useState(subject)
   const correct = useCorrectSubject(studyId, subject.id)
-  const mine = correct.variables
-  const overtaken = isChangedMeanwhile(correct.error) && subject.version !== seen.version
+  const [mine, setMine] = useState<z.output<typeof correction> | null>(null)
+  const save = (values: z.output<typeof correction>) =>
+    correct.mutateAsync({ ...values, version: seen.version }).catch((error) => {
+      setMine(isChangedMeanwhile(error) ? values : null)
+      throw error
+    })
+  const onTop = mine && subject.version !== seen.version ? rebased(mine, seen, subject) : null
   return (
     <>
-      {overtaken && mine && (
+      {onTop && (
         <ChangedMeanwhile
           what="this subject"
           rows={[
-            { label: 'Sex', mine: sexWords(mine.sex), stored: sexWords(subject.sex) },
+            { label: 'Sex', mine: sexWords(onTop.sex), stored: sexWords(subject.sex) },
             {
               label: 'Age band',
-              mine: ageBandWords(mine.ageBand),
+              mine: ageBandWords(onTop.ageBand),
               stored: ageBandWords(subject.ageBand),
             },
           ]}
           onKeepMine={() =>
-            correct.mutate({ ...mine, version: subject.version }, { onSuccess: onDone })
+            correct.mutateAsync({ ...onTop, version: subject.version }).then(onDone)
           }
           onKeepStored={onDone}
         />
@@ -48,8 +55,9 @@ export function SubjectCorrection({ studyId, subject, onDone }: SubjectCorrectio
           ageBand: seen.ageBand ?? undefined,
           reasonForChange: '',
         }}
+        takesFocus
         submitLabel="Save the correction"
-        onSubmit={(values) => correct.mutateAsync({ ...values, version: seen.version })}
+        onSubmit={save}
         onSaved={onDone}
         onCancel={onDone}
       >
