@@ -1,4 +1,4 @@
-import { type ReactNode, useEffect, useId, useMemo, useRef, useState } from 'react'
+import { type ReactNode, type RefObject, useEffect, useId, useMemo, useRef, useState } from 'react'
 import {
   type DefaultValues,
   type FieldErrors,
@@ -30,6 +30,10 @@ type FormProps<S extends FormSchema, Answer> = {
   cancelLabel?: string
   /** Why nothing can be changed here, as a sentence. */
   locked?: string
+  /** Changes when the person has dealt with what the whole form was refused for. */
+  dealtWith?: unknown
+  /** Opened by a press on this page: the first field takes the focus. */
+  takesFocus?: boolean
   /** Asks before unsaved work is left. */
   guard?: boolean
   /** More to press beside the submit button. */
@@ -41,7 +45,8 @@ type Refusal = { message: string; requestId?: string }
 
 /** The one form: checks by schema, sums errors up, keeps what was typed, says why it is locked. */
 export function Form<S extends FormSchema, Answer>(props: FormProps<S, Answer>) {
-  const { schema, locked, guard = true, onSubmit, onSaved } = props
+  const { schema, locked, guard = true, onSubmit, onSaved, dealtWith } = props
+  const element = useRef<HTMLFormElement>(null)
   const [parts] = useFormPartsOnce()
   const summary = useRef<HTMLDivElement>(null)
   const [refused, setRefused] = useState(false)
@@ -62,6 +67,13 @@ export function Form<S extends FormSchema, Answer>(props: FormProps<S, Answer>) 
     wantsFocus.current = false
     summary.current.focus()
   })
+  const [dealtWithBefore, setDealtWithBefore] = useState(dealtWith)
+  if (dealtWith !== dealtWithBefore) {
+    setDealtWithBefore(dealtWith)
+    setRefusal(null)
+    setRefused(false)
+  }
+  useFocusOnOpening(element, props.takesFocus === true)
   const showRefusal = (whole: Refusal | null) => {
     wantsFocus.current = true
     setRefused(true)
@@ -90,7 +102,7 @@ export function Form<S extends FormSchema, Answer>(props: FormProps<S, Answer>) 
   return (
     <FormContext value={parts}>
       <FormProvider {...form}>
-        <form noValidate onSubmit={(event) => void save(event)}>
+        <form ref={element} noValidate onSubmit={(event) => void save(event)}>
           {locked !== undefined && (
             <div className="mb-5">
               <Notice tone="warn" title="Locked">
@@ -132,6 +144,17 @@ export function Form<S extends FormSchema, Answer>(props: FormProps<S, Answer>) 
   )
 }
 
+/** What was pressed has gone from the page, and the focus with it. */
+function useFocusOnOpening(form: RefObject<HTMLFormElement | null>, wanted: boolean) {
+  useEffect(() => {
+    if (!wanted) return
+    const fields = form.current?.querySelectorAll<HTMLInputElement>('input, select, textarea')
+    const first = [...(fields ?? [])].find((field) => field.type !== 'radio' || field.checked)
+    const target = first ?? fields?.[0]
+    target?.focus()
+  }, [form, wanted])
+}
+
 function useFormPartsOnce() {
   const id = useId()
   return useState<FormParts>(() => ({
@@ -145,7 +168,11 @@ function fieldsOf(error: unknown): Record<string, string> {
   return error instanceof ApiError ? (error.fields ?? {}) : {}
 }
 
+const LOGIN_ENDED =
+  'Your login had ended. Sign in again, then press the button once more: what you entered is still here.'
+
 function refusalOf(error: unknown): Refusal {
+  if (error instanceof ApiError && error.code === 'not-signed-in') return { message: LOGIN_ENDED }
   if (error instanceof ApiError)
     // A refusal explains itself; only a fault is for somebody else to look up.
     return {

@@ -112,6 +112,7 @@ function Amendment({ newest, analytes }: AmendmentProps) {
         schema={amendment}
         defaultValues={{ document: basis.document, reasonForChange: '' }}
         submitLabel="Make the new version"
+        dealtWith={basis.number}
         locked={mayAmend ? undefined : lockedBecause(study.lockedAt !== null)}
         onSubmit={(values) => amend.mutateAsync({ ...values, basedOn: basis.number })}
         onSaved={() => navigate(back)}

@@ -1,5 +1,5 @@
 import { useQuery } from '@tanstack/react-query'
-import { useMemo, useState } from 'react'
+import { useEffect, useMemo, useRef, useState } from 'react'
 import { useLocation, useParams } from 'react-router-dom'
 import type { Subject } from '#shared/schemas/subject.ts'
 import { formatDate } from '#shared/terms/numbers.ts'
@@ -123,12 +123,19 @@ function Recorded({ subject }: { subject: Subject }) {
   const study = useStudy()
   const mayCorrect = useMay('subject.correct', { siteId: subject.siteId })
   const [correcting, setCorrecting] = useState(false)
+  const button = useRef<HTMLButtonElement>(null)
+  // The form takes the pressed button's place; when it goes, the focus returns to the button.
+  const wasCorrecting = useRef(false)
+  useEffect(() => {
+    if (wasCorrecting.current && !correcting) button.current?.focus()
+    wasCorrecting.current = correcting
+  }, [correcting])
   return (
     <section>
       <div className="mb-2 flex flex-wrap items-center gap-3">
         <h2 className="mb-0">Recorded</h2>
         {mayCorrect && !correcting && (
-          <Button kind="quiet" size="small" onClick={() => setCorrecting(true)}>
+          <Button ref={button} kind="quiet" size="small" onClick={() => setCorrecting(true)}>
             Correct
           </Button>
         )}

@@ -1,4 +1,4 @@
-import { type DragEvent, useId, useRef, useState } from 'react'
+import { type DragEvent, useEffect, useId, useRef, useState } from 'react'
 import { Button } from './Button.tsx'
 import { classes } from './classes.ts'
 import { formatBytes } from './formatBytes.ts'
@@ -31,6 +31,11 @@ export function FileDrop({
   const [over, setOver] = useState(false)
   const [problem, setProblem] = useState<string | null>(null)
   const shownProblem = problem ?? error
+
+  // The button that sent the file may be gone by now; the next step is another file.
+  useEffect(() => {
+    if (error !== undefined) input.current?.focus()
+  }, [error])
 
   const take = (files: FileList | null) => {
     const found = files === null ? null : problemOf(files, extensions, maxBytes)
