@@ -26,10 +26,12 @@ export function SignInAgain() {
 
   async function check() {
     try {
-      await queries.fetchQuery({ ...meQuery, staleTime: 0, retry: false })
+      const before = queries.getQueryData(meQuery.queryKey)?.person.id
+      const now = await queries.fetchQuery({ ...meQuery, staleTime: 0, retry: false })
       setEnded(false)
       setStillOut(false)
-      await queries.invalidateQueries()
+      // Somebody else is asked about by SomebodyElse, before anything is read in their name.
+      if (now.person.id === before) await queries.invalidateQueries()
     } catch {
       setStillOut(true)
     }

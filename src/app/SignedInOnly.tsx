@@ -8,6 +8,7 @@ import { SheetSkeleton } from '../ui/Skeleton.tsx'
 import { IdleWarning } from './IdleWarning.tsx'
 import { Landing } from './Landing.tsx'
 import { SignInAgain } from './SignInAgain.tsx'
+import { SomebodyElse } from './SomebodyElse.tsx'
 
 /** Lets in who is signed in; once in, a login that ends is asked for again over the page. */
 export function SignedInOnly() {
@@ -18,6 +19,7 @@ export function SignedInOnly() {
         <Outlet />
         <SignInAgain />
         <IdleWarning />
+        <SomebodyElse />
       </>
     )
   }
