@@ -13,32 +13,60 @@ type LockActionsProps = {
   readerId: string | undefined
 }
 
+type Deciding = { verb: 'withdraw' | 'return'; lock: Lock }
+
 /** What the reader may do about the lock now. */
 export function LockActions({ open, checklist, readerId }: LockActionsProps) {
   const study = useStudy()
-  const [dialog, setDialog] = useState<'request' | 'withdraw' | 'return' | null>(null)
-  const close = () => setDialog(null)
-  if (!open) {
-    if (!may(study, 'lock.request') || study.kind !== 'earlierData') return null
-    return (
-      <>
-        <Button onClick={() => setDialog('request')}>Ask for the final lock</Button>
-        <RequestLockDialog studyId={study.id} open={dialog === 'request'} onClose={close} />
-      </>
-    )
-  }
+  const [deciding, setDeciding] = useState<Deciding | null>(null)
+  return (
+    <>
+      {open ? (
+        <OpenRequest open={open} checklist={checklist} readerId={readerId} onDecide={setDeciding} />
+      ) : (
+        <AskForLock />
+      )}
+      {/* Stays when somebody else was quicker: it then says so and keeps what was typed. */}
+      {deciding && (
+        <DecideLockDialog studyId={study.id} {...deciding} open onClose={() => setDeciding(null)} />
+      )}
+    </>
+  )
+}
+
+function AskForLock() {
+  const study = useStudy()
+  const [asking, setAsking] = useState(false)
+  if (!may(study, 'lock.request') || study.kind !== 'earlierData') return null
+  return (
+    <>
+      <Button onClick={() => setAsking(true)}>Ask for the final lock</Button>
+      <RequestLockDialog studyId={study.id} open={asking} onClose={() => setAsking(false)} />
+    </>
+  )
+}
+
+type OpenRequestProps = {
+  open: Lock
+  checklist: readonly LockCheck[]
+  readerId: string | undefined
+  onDecide: (deciding: Deciding) => void
+}
+
+function OpenRequest({ open, checklist, readerId, onDecide }: OpenRequestProps) {
+  const study = useStudy()
   const decides = may(study, 'lock.approve') && open.requestedById !== readerId
   const left = checklist.filter((check) => check.blocking && check.left > 0).length
   return (
     <>
       {may(study, 'lock.withdraw') && (
-        <Button kind="quiet" onClick={() => setDialog('withdraw')}>
+        <Button kind="quiet" onClick={() => onDecide({ verb: 'withdraw', lock: open })}>
           Withdraw the request
         </Button>
       )}
       {decides && (
         <>
-          <Button kind="quiet" onClick={() => setDialog('return')}>
+          <Button kind="quiet" onClick={() => onDecide({ verb: 'return', lock: open })}>
             Send back with a reason
           </Button>
           <Button disabled={left > 0} onClick={() => authenticateToSign(study.id, open.id)}>
@@ -47,9 +75,6 @@ export function LockActions({ open, checklist, readerId }: LockActionsProps) {
               : `Approve and sign: ${left} ${left === 1 ? 'check' : 'checks'} left`}
           </Button>
         </>
-      )}
-      {dialog !== null && dialog !== 'request' && (
-        <DecideLockDialog studyId={study.id} lock={open} verb={dialog} open onClose={close} />
       )}
     </>
   )
