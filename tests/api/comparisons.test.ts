@@ -1,4 +1,7 @@
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
+import { comparisonResultOf } from '#shared/analyses/comparisonResultOf.ts'
+import { comparisonParameters } from '#shared/schemas/comparison.ts'
+import type { DatasetRow } from '#shared/schemas/dataset.ts'
 import { type Api, startApi } from '../support/api.ts'
 import { breathAmmonia, breathAmmoniaReference } from '../support/breathAmmonia.ts'
 import type { GivenSubject } from '../support/earlierData.ts'
@@ -92,11 +95,10 @@ describe('areas of several biomarkers in the same subjects', () => {
   })
 
   test('need no adjusting where they are two, and two different ones', async () => {
-    const study = await lockedStudy(api, breathAmmonia())
-    const { body } = await study.run(paired({ adjust: true }))
+    const { body } = await ammonia.run(paired({ adjust: true }))
     // One pair alone needs no adjusting.
     expect(body.result.comparisons[0].pAdjusted).toBeNull()
-    const same = await study.run(paired({ markers: [marker('ammonia'), marker('ammonia')] }))
+    const same = await ammonia.run(paired({ markers: [marker('ammonia'), marker('ammonia')] }))
     expect(Object.keys(same.body.fields)).toEqual(['parameters.compare.markers'])
   })
 
@@ -132,6 +134,46 @@ describe('areas of several biomarkers in the same subjects', () => {
     expect(body.result.areaWithheld).toContain('at least 10 subjects')
     expect(body.result.curves.map((each: { area: unknown }) => each.area)).toEqual([null, null])
   })
+})
+
+test('three biomarkers are compared pair by pair, and Holm’s rule adjusts their p values', () => {
+  const rows = breathAmmonia().map((each, at): DatasetRow => {
+    const { ammonia, acetone } = each.sessions![0]!.sensor!
+    const value = (ammonia as { value: number }).value
+    const readings = { ammonia: value, acetone: acetone as number, both: value + Number(acetone) }
+    return {
+      subject: `S${at}`,
+      subjectId: String(at),
+      site: 'N',
+      sex: null,
+      ageBand: null,
+      covariates: {},
+      session: 1,
+      sensorValues: Object.fromEntries(
+        Object.entries(readings).map(([key, reading]) => [
+          key,
+          { value: reading, belowLod: false },
+        ]),
+      ),
+      referenceValues: {},
+      outcome: each.outcome ?? null,
+    }
+  })
+  const analytes = ['ammonia', 'acetone', 'both'].map((key) => ({ key, name: key, unit: '[ppb]' }))
+  const asked = paired({ adjust: true, markers: analytes.map(({ key }) => marker(key)) })
+  const { comparisons } = comparisonResultOf(rows, analytes, comparisonParameters.parse(asked))
+  expect(comparisons.map(({ first, second }) => [first, second])).toEqual([
+    [0, 1],
+    [0, 2],
+    [1, 2],
+  ])
+  // Holm 1979: the smallest p times three, the next times two, the last as it is, never falling.
+  const rising = comparisons.toSorted((one, other) => one.p! - other.p!)
+  let largest = 0
+  for (const [rank, { p, pAdjusted }] of rising.entries()) {
+    largest = Math.min(1, Math.max(largest, (3 - rank) * p!))
+    expect(pAdjusted).toBeCloseTo(largest, 12)
+  }
 })
 
 describe('the area of one biomarker in two groups', () => {

@@ -23,7 +23,6 @@ type ChosenCutOffsProps = {
 /** Each cut-off that a rule chose from the data, as it looks there and as it may do elsewhere. */
 export function ChosenCutOffs({ rules, corrections, unit, children }: ChosenCutOffsProps) {
   if (rules.length === 0) return null
-  const isCorrected = corrections !== undefined && corrections.rules.length > 0
   return (
     <section
       aria-label="Cut-offs chosen from these data"
@@ -37,14 +36,8 @@ export function ChosenCutOffs({ rules, corrections, unit, children }: ChosenCutO
         columns={[
           { header: 'Chosen by' },
           { header: 'Cut-off', numeric: true },
-          { header: 'Sensitivity here', numeric: true },
-          { header: 'Specificity here', numeric: true },
-          ...(isCorrected
-            ? [
-                { header: 'Sensitivity, corrected', numeric: true },
-                { header: 'Specificity, corrected', numeric: true },
-              ]
-            : []),
+          { header: 'Sensitivity', numeric: true },
+          { header: 'Specificity', numeric: true },
         ]}
         rows={rules.map(({ rule, cutOffs: [preferred] }) => {
           const found = corrections?.rules.find((each) => each.rule === rule)
@@ -58,20 +51,16 @@ export function ChosenCutOffs({ rules, corrections, unit, children }: ChosenCutO
               threshold === null
                 ? 'nobody positive'
                 : withUnit(formatConcentration(threshold), unit),
-              formatEstimate(sensitivity),
-              formatEstimate(specificity),
-              ...(found
-                ? [
-                    <strong key="sensitivity">
-                      {formatEstimate(found.corrected.sensitivity)}
-                    </strong>,
-                    <strong key="specificity">
-                      {formatEstimate(found.corrected.specificity)}
-                    </strong>,
-                  ]
-                : isCorrected
-                  ? ['', '']
-                  : []),
+              <Rate
+                key="sensitivity"
+                here={sensitivity}
+                corrected={found?.corrected.sensitivity}
+              />,
+              <Rate
+                key="specificity"
+                here={specificity}
+                corrected={found?.corrected.specificity}
+              />,
             ],
           }
         })}
@@ -81,5 +70,24 @@ export function ChosenCutOffs({ rules, corrections, unit, children }: ChosenCutO
       </p>
       {children}
     </section>
+  )
+}
+
+/** As on these data and, under it, as to be expected elsewhere: on a phone too, never one without the other. */
+function Rate({ here, corrected }: { here: number; corrected: number | undefined }) {
+  return (
+    <>
+      {formatEstimate(here)}
+      <span className="block text-sm">
+        {corrected === undefined ? (
+          <span className="text-ink-2">not corrected</span>
+        ) : (
+          <>
+            <span className="text-ink-2">corrected</span>{' '}
+            <strong>{formatEstimate(corrected)}</strong>
+          </>
+        )}
+      </span>
+    </>
   )
 }
