@@ -1,6 +1,7 @@
 import type { AccuracyAtCutOffResult, MeasureRow } from '#shared/schemas/analysis.ts'
 import { accuracyAtCutOff } from '#shared/statistics/cutOffs/accuracyAtCutOff.ts'
 import type { RatioEstimate } from '#shared/statistics/cutOffs/logRatio.ts'
+import { observedPredictiveValues } from '#shared/statistics/cutOffs/observedPredictiveValues.ts'
 import {
   type PredictiveValue,
   predictiveValuesAtPrevalence,
@@ -18,8 +19,6 @@ type AtCutOff = {
   sampling: Sampling
 }
 
-const SAMPLED_BY_OUTCOME =
-  'Predictive values as observed are left out: subjects were chosen by outcome, so the share of them with the condition is the study’s own making.'
 const SESSIONS_TOGETHER =
   'No intervals are given here: sessions of one subject are not independent of each other, and the usual intervals would be too narrow. Choose one value for each subject to see them.'
 
@@ -44,10 +43,11 @@ export function accuracyAtCutOffOf(
     plainRow('likelihoodRatioNegative', at.likelihoodRatioNegative),
     plainRow('diagnosticOddsRatio', at.diagnosticOddsRatio),
   ]
-  if (sampling === 'cohort')
+  const observed = observedPredictiveValues(table, sampling, { level })
+  if (observed.shown)
     measures.push(
-      proportionRow('positivePredictiveValueObserved', at.positivePredictiveValue),
-      proportionRow('negativePredictiveValueObserved', at.negativePredictiveValue),
+      proportionRow('positivePredictiveValueObserved', observed.positive),
+      proportionRow('negativePredictiveValueObserved', observed.negative),
     )
   if (prevalence !== null) {
     const { positive, negative } = predictiveValuesAtPrevalence(table, prevalence, { level })
@@ -61,7 +61,7 @@ export function accuracyAtCutOffOf(
     cutOff,
     table,
     measures: clustered ? measures.map(withoutInterval) : measures,
-    observedPredictiveValuesHidden: sampling === 'byOutcome' ? SAMPLED_BY_OUTCOME : null,
+    observedPredictiveValuesHidden: observed.shown ? null : observed.sentence,
     caveat: clustered ? SESSIONS_TOGETHER : null,
   }
 }

@@ -1,12 +1,10 @@
 import { Worker } from 'node:worker_threads'
 import { beforeAll, describe, expect, test } from 'vitest'
 import { drawFigures, figureSvg } from '#server/reports/figureSvg.ts'
-import { figureTableBlock } from '#server/reports/figureTableBlock.ts'
 import { renderPdf } from '#server/reports/renderPdf.ts'
 import type { ReportBlock } from '#server/reports/reportDocument.ts'
 import { textRuns } from '#server/reports/textRuns.ts'
 import { RocCurve } from '#shared/figures/RocCurve.tsx'
-import { rocCurveTable } from '#shared/figures/rocCurveTable.ts'
 import { aReport, bookmarksOf, fileInfoOf, HASH, pagesOf } from '../support/reports.ts'
 
 /** Made-up numbers: only the look of the page is under test. */
@@ -137,14 +135,6 @@ test('a figure is drawn for the page as for the screen, with its missing signs s
   const svg = figureSvg(figure)
   expect(svg).toMatch(/Ammonia <tspan font-family="DejaVu Sans">→ <\/tspan>end-tidal/)
   expect(figureSvg(svg)).toBe(svg)
-})
-
-test('the numbers behind a figure are printed in the words of the screen', async () => {
-  const block = figureTableBlock(rocCurveTable({ curves: [{ ...curve, label: 'Ammonia' }] }))
-  const text = (await pagesOf(aReport([block]))).join('\n')
-  expect(text).toContain('Sensitivity and specificity at every threshold')
-  expect(text).toMatch(/Threshold \(ppb\)\s+Sensitivity\s+Specificity\s+1 − specificity/)
-  expect(text).toMatch(/1,180\s+0\.800\s+0\.800\s+0\.200/)
 })
 
 test('a report whose figures are drawn renders the same in a worker thread', async () => {

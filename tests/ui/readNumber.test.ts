@@ -38,9 +38,11 @@ test.each(['abc', '5 ppb', '1.2.3', '12 34', '0x10', 'Infinity', '--1', '1e999']
 )
 
 test('every finite number that JavaScript prints is read back as itself', () => {
-  fc.assert(
+  // The property is synchronous: there is no promise to wait for.
+  void fc.assert(
     fc.property(fc.double({ noNaN: true, noDefaultInfinity: true }), (value) => {
-      expect(readNumber(String(value)).value).toBe(value)
+      // Minus zero is written 0.
+      expect(readNumber(String(value)).value).toBe(value + 0)
     }),
   )
 })

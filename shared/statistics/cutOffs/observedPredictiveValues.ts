@@ -24,7 +24,7 @@ export function observedPredictiveValues(
 ): ObservedPredictiveValues {
   if (sampling === 'byOutcome') {
     const sentence =
-      'Subjects were sampled by their outcome, so observed predictive values say nothing; see those at a stated prevalence.'
+      'Predictive values as observed are left out: subjects were chosen by outcome, so the share of them with the condition is the study’s own making.'
     return { shown: false, sentence }
   }
   const { truePositives, falsePositives, falseNegatives, trueNegatives } = table

@@ -1,5 +1,5 @@
 import type { ReplicatesByMethod } from '#shared/statistics/agreement/replicateLimitsConstant.ts'
-import { completePairs } from '#shared/statistics/description/completePairs.ts'
+import { completePairs } from './completePairs.ts'
 import type { Surroundings } from './Quantity.ts'
 import type { Table } from './Table.ts'
 

@@ -1,6 +1,6 @@
-import { completePairs } from '#shared/statistics/description/completePairs.ts'
 import { pairColumns, pairTable } from './agreementInput.ts'
 import type { Actual } from './compare.ts'
+import { completePairs } from './completePairs.ts'
 import type { Quantities, Surroundings } from './Quantity.ts'
 import { classesOf, curveOf } from './rocInput.ts'
 

@@ -1,11 +1,11 @@
 import { delongArea } from '#shared/statistics/accuracy/delongArea.ts'
 import { rocCurve } from '#shared/statistics/accuracy/rocCurve.ts'
 import { netBenefit } from '#shared/statistics/cutOffs/netBenefit.ts'
-import { classesByOutcome } from '#shared/statistics/description/classesByOutcome.ts'
 import { brierScore } from '#shared/statistics/panel/brierScore.ts'
 import { calibrationOfProbabilities } from '#shared/statistics/panel/calibrationOfProbabilities.ts'
 import type { LogisticData } from '#shared/statistics/panel/fitLogistic.ts'
 import { logisticRegression } from '#shared/statistics/panel/logisticRegression.ts'
+import { classesByOutcome } from './classesByOutcome.ts'
 import type { Quantities, Surroundings } from './Quantity.ts'
 import { completeRows } from './rocInput.ts'
 

@@ -1,9 +1,6 @@
 import type { Direction } from '#shared/statistics/accuracy/Classes.ts'
 import { type RocCurve, rocCurve } from '#shared/statistics/accuracy/rocCurve.ts'
-import {
-  type ClassesByOutcome,
-  classesByOutcome,
-} from '#shared/statistics/description/classesByOutcome.ts'
+import { type ClassesByOutcome, classesByOutcome } from './classesByOutcome.ts'
 import type { Surroundings } from './Quantity.ts'
 import type { Table } from './Table.ts'
 

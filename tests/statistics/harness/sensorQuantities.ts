@@ -1,4 +1,3 @@
-import { completePairs } from '#shared/statistics/description/completePairs.ts'
 import { moments } from '#shared/statistics/description/moments.ts'
 import { allanDeviation } from '#shared/statistics/sensor/allanDeviation.ts'
 import { allanMinimum } from '#shared/statistics/sensor/allanMinimum.ts'
@@ -13,6 +12,7 @@ import { type DetectionLimit, detectionLimits } from '#shared/statistics/sensor/
 import { inversePrediction } from '#shared/statistics/sensor/inversePrediction.ts'
 import { limitOfBlank } from '#shared/statistics/sensor/limitOfBlank.ts'
 import type { Actual } from './compare.ts'
+import { completePairs } from './completePairs.ts'
 import type { Quantities, Surroundings } from './Quantity.ts'
 
 export const sensorQuantities: Quantities = {

@@ -1,4 +1,4 @@
-import { StatisticsError } from '../StatisticsError.ts'
+import { StatisticsError } from '#shared/statistics/StatisticsError.ts'
 
 export type CompletePairs = { first: Float64Array; second: Float64Array; dropped: number }
 

@@ -1,5 +1,5 @@
-import type { Classes, Direction } from '../accuracy/Classes.ts'
-import { StatisticsError } from '../StatisticsError.ts'
+import type { Classes, Direction } from '#shared/statistics/accuracy/Classes.ts'
+import { StatisticsError } from '#shared/statistics/StatisticsError.ts'
 
 export type ClassesByOutcome = Classes & {
   present: Float64Array
