@@ -13,10 +13,6 @@ import { roundTicks } from './roundTicks.ts'
 import { type ValueAxis, valueAxis } from './valueAxis.ts'
 
 export interface DifferencePlotProps extends FigureProps, DifferencePlotData {
-  /** Defaults to "Mean of sensor and reference". */
-  meanLabel?: string
-  /** Defaults to "Sensor − reference". */
-  differenceLabel?: string
   /** Where there is no difference: 0, or 1 for ratios. */
   noDifference?: number
   /** Defaults to linear. */
@@ -78,7 +74,7 @@ export function DifferencePlot(props: DifferencePlotProps) {
       <BottomAxis
         plot={plot}
         ticks={roundTicks(means, x, widthOf(plot))}
-        label={`${meanLabel} (${props.unit}${means.kind === 'log' ? ', log scale' : ''})`}
+        label={inUnit(meanLabel, props.unit, means.kind)}
         theme={theme}
       />
       <LeftAxis
@@ -86,7 +82,7 @@ export function DifferencePlot(props: DifferencePlotProps) {
         ticks={differences
           .ticks(6)
           .map((value) => ({ at: y(value), text: formatConcentration(value) }))}
-        label={`${differenceLabel} (${props.differenceUnit ?? props.unit})`}
+        label={inUnit(differenceLabel, props.differenceUnit ?? props.unit)}
         theme={theme}
       />
       {note && (
@@ -119,9 +115,15 @@ export function DifferencePlot(props: DifferencePlotProps) {
 export function describeDifferencePlot(props: DifferencePlotData): string {
   const unit = props.differenceUnit ?? props.unit
   const lines = namedLines(props, figureThemes.light).map(({ label, value }) =>
-    value ? `${label}: ${value} ${unit}.` : `${label}.`,
+    value ? `${label}: ${unit ? `${value} ${unit}` : value}.` : `${label}.`,
   )
   return [`${props.pairs.length} pairs.`, ...lines].join(' ')
+}
+
+/** "Mean (ppb, log scale)"; no brackets where nothing stands in them. */
+function inUnit(label: string, unit: string, kind: ValueAxis['kind'] = 'linear'): string {
+  const parts = [unit, kind === 'log' ? 'log scale' : ''].filter((part) => part !== '')
+  return parts.length === 0 ? label : `${label} (${parts.join(', ')})`
 }
 
 interface NamedLine extends KeyEntry {

@@ -50,13 +50,14 @@ export function differencePlotTable(props: DifferencePlotData): FigureTable {
 /** Every pair behind the plot. */
 export function differencePairsTable(props: DifferencePlotData): FigureTable {
   const { pairs, unit, differenceUnit = unit } = props
+  const { meanLabel = 'Mean', differenceLabel = 'Difference' } = props
   const named = pairs.some(({ subject }) => subject)
   return {
     caption: 'Difference and mean of every pair',
     columns: [
       ...(named ? [{ key: 'subject', label: 'Subject', format: 'text' as const }] : []),
-      { key: 'mean', label: 'Mean', unit, format: 'concentration' },
-      { key: 'difference', label: 'Difference', unit: differenceUnit, format: 'concentration' },
+      { key: 'mean', label: meanLabel, unit, format: 'concentration' },
+      { key: 'difference', label: differenceLabel, unit: differenceUnit, format: 'concentration' },
     ],
     rows: pairs.map(({ subject, mean, difference }) => ({
       subject: subject ?? 'not named',

@@ -25,6 +25,9 @@ export interface DifferencePlotData {
   unit: string
   /** Unit of the difference where it is another, such as % of the mean. */
   differenceUnit?: string
+  /** What is plotted; "Mean of sensor and reference" and "Sensor − reference" unless given. */
+  meanLabel?: string
+  differenceLabel?: string
   /** What the lines are called where they are not bias and limits of agreement. */
   lineNames?: { upper: string; middle: string; lower: string }
 }
