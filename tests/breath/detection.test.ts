@@ -50,6 +50,10 @@ describe('a cough', () => {
     },
   )
 
+  test('that dips to exactly 30 % does not end it: it has to fall below', async () => {
+    expect(await breathsOf([AIR, 2], [5, 4], [1.5, 0.4], [5, 5.6], [AIR, 3])).toHaveLength(1)
+  })
+
   test('before the exhalation, half a second long, is not listed', async () => {
     const found = await breathsOf([AIR, 2], [3, 0.5], [AIR, 1], [5, 8], [AIR, 3])
     expect(found).toHaveLength(1)
@@ -90,6 +94,18 @@ describe('the maximum', () => {
     const fall: Piece[] = Array.from({ length: 60 }, (_, i) => [5 * Math.exp(-i / 15), 0.1, 0])
     expect(await breathsOf([AIR, 2], [5, 6], ...fall, [AIR, 3])).toHaveLength(1)
   })
+})
+
+test('a small breath after a slow fall is found with its own maximum', async () => {
+  const fall: Piece[] = Array.from({ length: 60 }, (_, i) => [AIR + 5 * Math.exp(-i / 12), 0.1, 0])
+  const found = await breathsOf([AIR, 2], [5, 6], ...fall, [AIR, 3], [1.2, 6, 50], [AIR, 3])
+  expect(found.map(({ endTidalCo2Percent }) => endTidalCo2Percent)).toEqual([5.04, 1.2])
+})
+
+test('a breath of exactly one second is listed', async () => {
+  // From nought to 5 % and back both crossings lie half a step from the samples.
+  expect(await breathsOf([0, 2], [5, 1], [0, 3])).toHaveLength(1)
+  expect(await breathsOf([0, 2], [5, 0.9], [0, 3])).toHaveLength(0)
 })
 
 describe('an early stop', () => {
@@ -214,6 +230,20 @@ describe('flow', () => {
     expectSixFigures(found!.meanFlowMlS, 45)
     // The first 150 mL end 2.2 s after CO2 rose: 40 mL before it, 110 mL at 50 mL/s.
     expectSixFigures(found!.phaseThreeS, 6 - 2.2)
+  })
+
+  test.each([
+    [7, 2.8],
+    [2.8, 7],
+  ])('that pauses after %s s, for %s s more, counts in its longer run', async (before, after) => {
+    const pieces: Piece[] = [
+      [5, before, 50],
+      [5, 0.2, 0],
+      [5, after, 50],
+    ]
+    const [found] = await breathsOf([AIR, 2], ...pieces, [AIR, 3])
+    expect(found!.durationS).toBe(7)
+    expectSixFigures(found!.volumeMl, 350)
   })
 
   test('that is not recorded leaves duration to CO2 and volume open', async () => {

@@ -174,6 +174,16 @@ describe('AMBIENT', () => {
     expect(found.readings[0]!.gradientPpb).toBe(-100)
   })
 
+  test.each([0.2, 0.4])('room air of %s s remains beside a disturbed second', async (seconds) => {
+    const disturbed = air(1, { gas: 9000 })
+    for (const pieces of [
+      [air(seconds), disturbed, breath(10), disturbed],
+      [disturbed, breath(10), disturbed, air(seconds)],
+    ]) {
+      expect((await readTrace(stepTrace(pieces))).analytes[0]!.roomAirPpb).toBe(20)
+    }
+  })
+
   test('room air leaves out the second beside an exhalation, and may be measured apart', async () => {
     const pieces = [air(3), air(1, { gas: 9000 }), breath(10), air(1, { gas: 9000 }), air(3)]
     const text = stepTrace(pieces)
@@ -268,6 +278,27 @@ describe('RANGE', () => {
     const peak = breath(0.1, { gas: 1000 })
     const found = await exhalationOf([air(3), breath(8), peak, breath(1.9), air(3)], {}, settings)
     expect(named(found, 'RANGE')[0]).toMatchObject({ cause: 'saturated', value: 1000 })
+  })
+
+  test('a saturated sample after the exhalation counts where the last one leans on it', async () => {
+    const settings = { analytes: { isoprene: { rangeMaxPpb: 1000, transportDelayS: 0.05 } } }
+    const after = [air(0.1, { gas: 1000 }), air(3)]
+    const found = await exhalationOf([air(3), breath(10), ...after], {}, settings)
+    expect(named(found, 'RANGE')[0]).toMatchObject({ cause: 'saturated', value: 1000 })
+  })
+
+  test('a delayed gas is not interpolated across a gap after the exhalation', async () => {
+    const settings = { analytes: { isoprene: { transportDelayS: 1 } } }
+    const without = (t: number) => t >= 13.5 && t < 14
+    const found = await exhalationOf(pieces, { without }, settings)
+    expect(named(found, 'RANGE').map(({ cause }) => cause)).toEqual(['incomplete'])
+    expect(found.readings[0]).toMatchObject({ meanPpb: null, accepted: false })
+  })
+
+  test('a gap adds no volume beyond one step', async () => {
+    const found = await exhalationOf(pieces, { without: (t) => t >= 5 && t < 6 })
+    expectSixFigures(found.volumeMl, 450)
+    expectSixFigures(found.durationS, 9)
   })
 
   test('a reading below the limit of detection is kept as measured and marked', async () => {

@@ -142,6 +142,13 @@ test('a text is sliced without splitting a character', async () => {
   expect((await readTrace(file)).recording.firmware).toBe('😀')
 })
 
+test('one chunk of many lines is read as many', async () => {
+  const rows = rowsOf({ ...aBreath, afterS: 2000 })
+  const bytes = new TextEncoder().encode(csvOfBreath(aBreath, rows))
+  expect(bytes.length).toBeGreaterThan(200_000)
+  expect((await readColumns(bytesInChunks(bytes, []))).timeS).toHaveLength(rows.length)
+})
+
 test('two hundred thousand rows are read in their order, and every number is kept', async () => {
   const count = 200_000
   async function* rows() {
