@@ -10,6 +10,7 @@ import { rocCurve } from '#shared/statistics/accuracy/rocCurve.ts'
 import { venkatramanTest } from '#shared/statistics/accuracy/venkatramanTest.ts'
 import { METHODS } from '#shared/statistics/METHODS.ts'
 import { StatisticsError } from '#shared/statistics/StatisticsError.ts'
+import { SUBGROUPING_LABELS } from '#shared/terms/analysis.ts'
 import type { Direction } from '#shared/terms/protocol.ts'
 import { areaEstimateOf } from './areaEstimateOf.ts'
 import { type CompleteSubject, completeSubjects } from './completeSubjects.ts'
@@ -52,7 +53,7 @@ export function comparisonResultOf(
             subjects.filter((each) => groupOf(each, compare.by) === group),
             0,
             compare.marker.direction,
-            group,
+            groupLabel(compare.by, group),
             named[0]!.unit,
             confidence,
           ),
@@ -203,6 +204,9 @@ function groupOf({ subject }: CompleteSubject, by: Independent['by']): string | 
   }
   return subject[by.kind]
 }
+
+const groupLabel = (by: Independent['by'], group: string): string =>
+  `${by.kind === 'covariate' ? by.name : SUBGROUPING_LABELS[by.kind]} ${group}`
 
 /** Subjects of neither group are left out too. */
 function inGroups(
