@@ -19,6 +19,8 @@ const CONSTANT =
   'Every session counts, with subjects as clusters and the true value of a subject taken to stay the same: the sessions are repeats by each method. The limits hold for a single session. Choose this only where nothing in the subject changed between sessions.'
 const TOO_FEW_FOR_PERCENTILES =
   'There are too few pairs for an interval at the percentiles: the limits are little more than the extremes. An interval takes about 150 pairs.'
+const CROSSING =
+  'The fitted spread falls below 0 at one end of what was measured, so the limits cross there and mean nothing. Choose a spread that is the same at all sizes, or another scale.'
 const ONE_PAIR_EACH =
   'Lines and correlations take one pair of each subject: with every session they would count subjects twice. Choose the first session, or the mean or median of each subject, to see them.'
 
@@ -33,11 +35,15 @@ export function agreementFiguresOf(pairs: AgreementPairs, at: AgreementQuestion)
   const clustered = sessionRule === 'every' && several
   const both = { first: pairs.sensor, second: pairs.reference }
   const lines = clustered ? replicateLimitsOf(pairs, at) : agreementLimitsOf(both, at)
+  const crossing = lines.alongMean.some(
+    ({ lowerLimit, upperLimit }) => upperLimit.estimate < lowerLimit.estimate,
+  )
   const noInterval = lines.lowerLimit.lower === null || lines.upperLimit.upper === null
   const caveats = [
     ...(clustered ? [trueValue === 'varying' ? VARYING : CONSTANT] : []),
     ...(several && ['mean', 'median'].includes(sessionRule) ? [AVERAGED] : []),
     ...(lines.sd === 0 ? [NO_SPREAD] : []),
+    ...(crossing ? [CROSSING] : []),
     ...(scale === 'nonparametric' && noInterval ? [TOO_FEW_FOR_PERCENTILES] : []),
   ]
   return {

@@ -171,6 +171,20 @@ describe('the scale of the limits', () => {
     expect(width).toBeCloseTo(1.959963984540054 * 39.89603418283774, 9)
   })
 
+  test('says so where a fitted spread falls below 0 and the limits cross', async () => {
+    const apart = [10, -10, 0, 0, 0, 0, 0, 0, 0, 0]
+    const { run } = await aLockedStudy(
+      apart.map((difference, at) => {
+        const mean = 100 + 10 * at
+        return { sessions: [session(mean + difference / 2, mean - difference / 2)] }
+      }),
+    )
+    const changing = await run(agreement({ scale: 'regression' }))
+    expect(changing.body.result.caveats.join(' ')).toContain('limits cross')
+    const constant = await run(agreement({ scale: 'regression', spread: 'constant' }))
+    expect(constant.body.result.caveats.join(' ')).not.toContain('limits cross')
+  })
+
   test('comes with hints: normality of the differences, and a slope on the mean', async () => {
     const { run } = await aLockedStudy(ONCE)
     const { body } = await run(agreement())
