@@ -1,7 +1,9 @@
+import { eq } from 'drizzle-orm'
 import { afterAll, beforeAll, describe, expect, test } from 'vitest'
+import { analyses } from '#db/schema/analyses.ts'
 import { JOB_HANDLERS } from '#server/jobHandlers.ts'
 import { runNextJob } from '#server/jobs/runner.ts'
-import { type Api, startApi } from '../support/api.ts'
+import { type Api, aKey, startApi } from '../support/api.ts'
 import { breathAmmonia, breathAmmoniaReference } from '../support/breathAmmonia.ts'
 import type { GivenSubject } from '../support/earlierData.ts'
 import { lockedStudy } from '../support/lockedStudy.ts'
@@ -288,4 +290,21 @@ test('a success criterion is met where every interval lies above its floor, and 
     accuracy({ resampling: null, floors: { sensitivity: null, specificity: null, area: null } }),
   )
   expect(none.status).toBe(422)
+})
+
+test('an analysis stored before there were options reads and repeats without a difference', async () => {
+  const plain = accuracy({ resampling: null })
+  const { body } = await ammonia.run(plain)
+  const [row] = await api.fixtures.select().from(analyses).where(eq(analyses.id, body.id))
+  const { kind, analyteKey, direction, sessionRule, cutOff, confidence, prevalence } =
+    body.parameters
+  const old = { kind, analyteKey, direction, sessionRule, cutOff, confidence, prevalence }
+  const oldId = aKey()
+  await api.fixtures
+    .insert(analyses)
+    .values({ ...row!, id: oldId, number: 1_000, parameters: old as never })
+  const read = await api.as(ammonia.analyst).get(`/api/analyses/${oldId}`).expect(200)
+  expect(read.body.parameters).toMatchObject({ ...old, areaInterval: 'delong', resampling: null })
+  const again = await api.as(ammonia.analyst).post(`/api/analyses/${oldId}/repeat`).expect(200)
+  expect(again.body).toMatchObject({ same: true, differences: [] })
 })
