@@ -1,3 +1,10 @@
+import { agreementParameters } from '#shared/schemas/agreement.ts'
+import {
+  type AccuracyParameters,
+  type AnalysisParameters,
+  type AnalysisRequest,
+  accuracyParameters,
+} from '#shared/schemas/analysis.ts'
 import type { ColumnMeaning } from '#shared/schemas/import.ts'
 import type { StudyInput } from '#shared/schemas/study.ts'
 import { SeededRandom } from './random.ts'
@@ -11,6 +18,8 @@ export type DemonstrationStudy = {
   /** Site by the word in the file, as its prefix. */
   siteWords: Record<string, string>
   locked: boolean
+  /** What the analyst stores after the lock, and reports. */
+  analyses: Pick<AnalysisRequest, 'title' | 'parameters'>[]
 }
 
 const SITES = [
@@ -57,6 +66,37 @@ function ammoniaRows(count: number, seed: number): string {
   return `${lines.join('\n')}\n`
 }
 
+/** Three sessions a subject: the same breath again, so that precision can be seen. */
+function repeatedRows(subjects: number, seed: number): string {
+  const random = new SeededRandom(seed)
+  const lines = ['row,site,session,sex,age,ammonia_ppb,analyser_ammonia_ppb,condition']
+  for (let subject = 1; subject <= subjects; subject++) {
+    const present = random.uniform() < 0.4
+    const usual = Math.exp(Math.log(present ? 1300 : 780) + 0.45 * random.normal())
+    const site = random.pick(['north', 'south'])
+    const sex = random.uniform() < 0.5 ? 'F' : 'M'
+    const age = Math.round(35 + 45 * random.uniform())
+    for (let session = 1; session <= 3; session++) {
+      const truth = usual * Math.exp(0.09 * random.normal())
+      const sensor = truth * Math.exp(0.06 * random.normal())
+      const analyser = truth * 0.98 + 10 + 20 * random.normal()
+      lines.push(
+        [
+          `R${String(subject).padStart(3, '0')}`,
+          site,
+          session,
+          sex,
+          age,
+          sensor.toFixed(0),
+          Math.max(1, analyser).toFixed(0),
+          present ? 'present' : 'absent',
+        ].join(','),
+      )
+    }
+  }
+  return `${lines.join('\n')}\n`
+}
+
 const MEANINGS: DemonstrationStudy['meanings'] = {
   row: { as: 'subject' },
   site: { as: 'site' },
@@ -76,7 +116,31 @@ const MEANINGS: DemonstrationStudy['meanings'] = {
 
 const SITE_WORDS = { north: 'N04', south: 'N02', harbour: 'H11' }
 
-const setUp = (code: string, title: string): DemonstrationStudy['input'] => ({
+const accuracy = (
+  at: Pick<AccuracyParameters, 'cutOff' | 'prevalence' | 'sessionRule'>,
+): AnalysisParameters =>
+  accuracyParameters.parse({
+    ...at,
+    kind: 'accuracy',
+    analyteKey: 'ammonia',
+    direction: 'higher',
+    confidence: 0.95,
+  })
+
+const agreement = (sessionRule: 'first' | 'every'): AnalysisParameters =>
+  agreementParameters.parse({
+    kind: 'agreement',
+    analyteKey: 'ammonia',
+    sessionRule,
+    confidence: 0.95,
+    acceptance: { lower: -200, upper: 200 },
+  })
+
+const setUp = (
+  code: string,
+  title: string,
+  plannedSubjects: number,
+): DemonstrationStudy['input'] => ({
   kind: 'earlierData',
   code,
   title,
@@ -104,7 +168,7 @@ const setUp = (code: string, title: string): DemonstrationStudy['input'] => ({
     referenceStandard: 'Histology by two readers (invented)',
     sampling: 'cohort',
     regulatoryStatus: 'researchUse',
-    plannedSubjects: 240,
+    plannedSubjects,
     primaryAnalyteKey: 'ammonia',
     biomarkers: [
       { analyteKey: 'ammonia', direction: 'higher', plannedCutOff: 1180 },
@@ -116,18 +180,61 @@ const setUp = (code: string, title: string): DemonstrationStudy['input'] => ({
 
 export const DEMONSTRATION_STUDIES: readonly DemonstrationStudy[] = [
   {
-    input: setUp('LARK-1', 'Exhaled ammonia in suspected advanced liver fibrosis, earlier data'),
+    input: setUp(
+      'LARK-1',
+      'Exhaled ammonia in suspected advanced liver fibrosis, earlier data',
+      240,
+    ),
     csv: ammoniaRows(240, 20_261_130),
     meanings: MEANINGS,
     siteWords: SITE_WORDS,
     locked: true,
+    analyses: [
+      {
+        title: 'Ammonia against histology, planned cut-off',
+        parameters: accuracy({ cutOff: 1180, prevalence: 0.2, sessionRule: 'first' }),
+      },
+      {
+        title: 'Ammonia, sensor against reference analyser',
+        parameters: agreement('first'),
+      },
+    ],
   },
   {
-    input: setUp('LARK-0', 'Exhaled ammonia, pilot series, data still open'),
+    input: setUp('WREN-1', 'Exhaled ammonia on three days, repeatability, earlier data', 60),
+    csv: repeatedRows(60, 41_180),
+    meanings: { ...MEANINGS, session: { as: 'sessionNumber' } },
+    siteWords: SITE_WORDS,
+    locked: true,
+    analyses: [
+      {
+        title: 'Ammonia against histology, every session, clustered by subject',
+        parameters: accuracy({ cutOff: null, prevalence: null, sessionRule: 'every' }),
+      },
+      {
+        title: 'Ammonia, sensor against reference analyser, three sessions a subject',
+        parameters: agreement('every'),
+      },
+      {
+        title: 'Precision of the ammonia sensor',
+        parameters: {
+          kind: 'precision',
+          analyteKey: 'ammonia',
+          measuredBy: 'sensor',
+          confidence: 0.95,
+          reliabilityWanted: 0.95,
+          accuracyId: null,
+        },
+      },
+    ],
+  },
+  {
+    input: setUp('LARK-0', 'Exhaled ammonia, pilot series, data still open', 60),
     csv: ammoniaRows(60, 7_316),
     meanings: MEANINGS,
     siteWords: SITE_WORDS,
     locked: false,
+    analyses: [],
   },
 ]
 

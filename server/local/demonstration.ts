@@ -34,7 +34,7 @@ async function play(study: DemonstrationStudy): Promise<void> {
   if (counts.subjects === 0) await bringIn(studyId, study)
   if (!study.locked) return
   if (!lockedAt) await lock(studyId)
-  await analyse(studyId)
+  await analyse(studyId, study)
 }
 
 async function findStudy(code: string): Promise<string | undefined> {
@@ -134,30 +134,13 @@ async function lock(studyId: string): Promise<void> {
   )
 }
 
-/** Two analyses and a report of both, unless they are there. */
-async function analyse(studyId: string): Promise<void> {
+/** The stored analyses and a report of them, unless they are there. */
+async function analyse(studyId: string, study: DemonstrationStudy): Promise<void> {
   const analyst = as(ANALYST)
   if ((await done(analyst.get(`/api/studies/${studyId}/reports`))).length > 0) return
   const [dataset] = await done(analyst.get(`/api/studies/${studyId}/datasets`))
-  const common = { analyteKey: 'ammonia', sessionRule: 'first', confidence: 0.95 }
-  const requests = [
-    {
-      title: 'Ammonia against histology, planned cut-off',
-      parameters: {
-        ...common,
-        kind: 'accuracy',
-        direction: 'higher',
-        cutOff: 1180,
-        prevalence: 0.2,
-      },
-    },
-    {
-      title: 'Ammonia, sensor against reference analyser',
-      parameters: { ...common, kind: 'agreement', acceptance: { lower: -200, upper: 200 } },
-    },
-  ]
   const analysisIds: string[] = []
-  for (const request of requests) {
+  for (const request of study.analyses) {
     const id = randomUUID()
     await done(
       analyst.post(`/api/studies/${studyId}/analyses`, { ...request, id, datasetId: dataset.id }),
