@@ -7,6 +7,7 @@ import { ConversionsPart } from '../features/sensors/ConversionsPart.tsx'
 import { DetectionPart } from '../features/sensors/DetectionPart.tsx'
 import { NoisePart } from '../features/sensors/NoisePart.tsx'
 import { SENSOR_PARTS, type SensorPart } from '../features/sensors/sensorParts.ts'
+import { TracePart } from '../features/sensors/TracePart.tsx'
 import { UncertaintyPart } from '../features/sensors/UncertaintyPart.tsx'
 import { useBlanks } from '../features/sensors/useBlanks.ts'
 import { useStandards } from '../features/sensors/useStandards.ts'
@@ -16,7 +17,7 @@ import { PageHead } from '../ui/PageHead.tsx'
 import { SegmentedLinks } from '../ui/SegmentedLinks.tsx'
 import { Sheet } from '../ui/Sheet.tsx'
 
-/** Calibration, limits, noise and uncertainty of a sensor; needs no study and stores nothing. */
+/** Calibration, limits, noise, uncertainty and breath traces of a sensor; needs no study and stores nothing. */
 export default function SensorPage() {
   const { part: key } = useParams()
   // What was given stays while somebody moves between the parts, and no longer.
@@ -35,7 +36,7 @@ export default function SensorPage() {
     <>
       <PageHead
         title="Characterise a sensor"
-        sub="Calibration, limits, noise and uncertainty. Nothing on this page is stored."
+        sub="Calibration, limits, noise, uncertainty and breath traces. Nothing on this page is stored."
         back={{ to: '/', label: 'Your studies' }}
       />
       <SegmentedLinks
@@ -47,6 +48,7 @@ export default function SensorPage() {
         {part.key === 'detection' && <DetectionPart standards={standards} blanks={blanks} />}
         {part.key === 'noise' && <NoisePart provenance={provenance} />}
         {part.key === 'uncertainty' && <UncertaintyPart />}
+        {part.key === 'trace' && <TracePart provenance={provenance} />}
         {part.key === 'conversions' && <ConversionsPart />}
       </Sheet>
     </>

@@ -2,7 +2,7 @@ import type { SensorMethod } from '#shared/statistics/sensor/SENSOR_METHODS.ts'
 
 export type SensorPart = {
   /** In the address: /sensor/calibration. */
-  key: 'calibration' | 'detection' | 'noise' | 'uncertainty' | 'conversions'
+  key: 'calibration' | 'detection' | 'noise' | 'uncertainty' | 'trace' | 'conversions'
   label: string
   methods: readonly SensorMethod[]
 }
@@ -13,5 +13,6 @@ export const SENSOR_PARTS: readonly [SensorPart, ...SensorPart[]] = [
   { key: 'detection', label: 'Detection limits', methods: ['detection', 'limitOfBlank'] },
   { key: 'noise', label: 'Noise over time', methods: ['allan', 'allanMinimum'] },
   { key: 'uncertainty', label: 'Uncertainty of a session', methods: ['uncertainty'] },
+  { key: 'trace', label: 'Breath trace', methods: ['uncertainty'] },
   { key: 'conversions', label: 'Conversions', methods: [] },
 ]
