@@ -1,6 +1,6 @@
 import { useQueryClient } from '@tanstack/react-query'
 import { useEffect, useState } from 'react'
-import { meQuery } from '../api/me.ts'
+import { meQuery, somebodyElseIn } from '../api/me.ts'
 import { onSignedOut } from '../api/signedOut.ts'
 import { Button } from '../ui/Button.tsx'
 import { buttonLook } from '../ui/buttonLook.ts'
@@ -26,14 +26,15 @@ export function SignInAgain() {
 
   async function check() {
     try {
-      const before = queries.getQueryData(meQuery.queryKey)?.person.id
-      const now = await queries.fetchQuery({ ...meQuery, staleTime: 0, retry: false })
+      await queries.fetchQuery({ ...meQuery, staleTime: 0, retry: false })
       setEnded(false)
       setStillOut(false)
-      // Somebody else is asked about by SomebodyElse, before anything is read in their name.
-      if (now.person.id === before) await queries.invalidateQueries()
-    } catch {
-      setStillOut(true)
+      await queries.invalidateQueries()
+    } catch (error) {
+      // Another person's sign-in is SomebodyElse's to speak of.
+      const isSomebodyElse = somebodyElseIn(error) !== null
+      setEnded(!isSomebodyElse)
+      setStillOut(!isSomebodyElse)
     }
   }
 

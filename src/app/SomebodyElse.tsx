@@ -1,6 +1,6 @@
 import { useQuery } from '@tanstack/react-query'
-import { useEffect, useState } from 'react'
-import { meQuery } from '../api/me.ts'
+import { useEffect } from 'react'
+import { meQuery, somebodyElseIn } from '../api/me.ts'
 import { Button } from '../ui/Button.tsx'
 import { buttonLook } from '../ui/buttonLook.ts'
 import { Dialog } from '../ui/Dialog.tsx'
@@ -10,20 +10,18 @@ import { Dialog } from '../ui/Dialog.tsx'
  * typed here must not be saved under another name, nor shown values be read by somebody else.
  */
 export function SomebodyElse() {
-  const { data, refetch, isFetching } = useQuery(meQuery)
-  const [opened, setOpened] = useState(data?.person)
-  if (data && !opened) setOpened(data.person)
+  const { data, error, refetch, isFetching } = useQuery(meQuery)
   useEffect(() => {
     // The other sign-in was in another window, so it is asked whenever somebody comes back to this one.
     const back = () => void refetch()
     window.addEventListener('focus', back)
     return () => window.removeEventListener('focus', back)
   }, [refetch])
-  const now = data?.person
-  if (!now || !opened || now.id === opened.id) return null
+  const now = somebodyElseIn(error)
+  const opener = data?.person.name ?? ''
   return (
     <Dialog
-      open
+      open={now !== null}
       title="Somebody else is signed in now"
       onClose={() => void refetch()}
       actions={
@@ -32,19 +30,20 @@ export function SomebodyElse() {
             kind="quiet"
             busy={isFetching && 'One moment…'}
             onClick={() => void refetch()}
-          >{`${opened.name} has signed in again`}</Button>
+          >{`${opener} has signed in again`}</Button>
           <a href="/" className={buttonLook('primary')}>
-            Begin anew as {now.name}
+            Begin anew as {now}
           </a>
         </>
       }
     >
       <p>
-        {opened.name} opened this page, and {now.name} has signed in in this browser since. Nothing
-        can be done on this page under another name.
+        {opener} opened this page, and {now} has signed in in this browser since. Nothing can be
+        done on this page under another name.
       </p>
       <p className="mt-2">
-        To keep what was entered here, {opened.name} signs out and in again in another window.
+        What was entered here is not saved. To keep it, sign out in another window and sign in there
+        again as {opener}.
       </p>
     </Dialog>
   )
