@@ -3,6 +3,7 @@ import { type ReactNode, useMemo } from 'react'
 import { classes } from './classes.ts'
 import { dataTableFeatures, toColumnDef } from './dataTableFeatures.ts'
 import { ErrorNotice } from './ErrorNotice.tsx'
+import { isRefusedAddress, NotAskedWell } from './NotAskedWell.tsx'
 import { NothingFits } from './NothingFits.tsx'
 import { ScrollBox } from './ScrollBox.tsx'
 import { SkeletonRows } from './SkeletonRows.tsx'
@@ -92,7 +93,8 @@ export function DataTable<Row extends RowData>(props: DataTableProps<Row>) {
         <div className="mb-3 flex flex-wrap items-end gap-3 print:hidden">{props.filters}</div>
       )}
       <SortChoice columns={columns} params={params} />
-      {status?.error && (
+      {status?.error && isRefusedAddress(status.error) && <NotAskedWell params={params} />}
+      {status?.error && !isRefusedAddress(status.error) && (
         <ErrorNotice
           what={`"${props.caption}" could not be read`}
           error={status.error}

@@ -27,7 +27,9 @@ export function ErrorNotice({ what, error, onRetry }: ErrorNoticeProps) {
   )
 }
 
+/** A refusal explains itself; only a fault is for somebody else to look up. */
 function requestIdOf(error: unknown): string | undefined {
   if (!(error instanceof Error) || !('requestId' in error)) return undefined
+  if ('status' in error && Number(error.status) < 500) return undefined
   return typeof error.requestId === 'string' ? error.requestId : undefined
 }

@@ -17,6 +17,8 @@ export type TableParams = {
   setSort: (sort: TableSort | null) => void
   setFilter: (name: string, value: string) => void
   clearFilters: () => void
+  /** All rows in the first order, from the first page. */
+  reset: () => void
   goNext: (key: string, rowsHere: number) => void
   goPrevious: () => void
 }
@@ -84,6 +86,12 @@ export function useTableParams<Name extends string>({
     setFilter: (name, value) => change({ [name]: value, after: null }, [], true),
     clearFilters: () =>
       change({ ...Object.fromEntries(names.map((name) => [name, null])), after: null }, [], true),
+    reset: () =>
+      change(
+        { ...Object.fromEntries(names.map((name) => [name, null])), sort: null, after: null },
+        [],
+        true,
+      ),
     goNext: (key, rowsHere) => {
       const from = (trail.at(-1)?.from ?? 0) + rowsHere
       change({ after: key }, [...trail, { after, from }], false)
@@ -113,6 +121,11 @@ export function useLocalTableParams(firstSort?: string): TableParams {
       setPages([])
     },
     clearFilters: () => {
+      setFilters({})
+      setPages([])
+    },
+    reset: () => {
+      setSort(readSort(firstSort))
       setFilters({})
       setPages([])
     },
