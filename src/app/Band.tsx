@@ -6,6 +6,7 @@ import { signOut } from '../api/signOut.ts'
 import { useLeaveAfterAsking } from '../forms/UnsavedWork.tsx'
 import { BreathMark } from './BreathMark.tsx'
 import { useNightTheme } from './nightTheme.ts'
+import { PrintedHead } from './PrintedHead.tsx'
 import { SavedState } from './SavedState.tsx'
 
 type BandProps = {
@@ -36,49 +37,52 @@ export function Band({ study, roles }: BandProps) {
   const leave = useMutation({ mutationFn: signOut, meta: { quiet: true } })
   const leaveAfterAsking = useLeaveAfterAsking()
   return (
-    <header className="flex min-h-12 flex-wrap items-center gap-x-5 gap-y-1.5 bg-band px-7 py-2 text-band-ink max-wide:px-4 print:hidden [&_:focus-visible]:outline-band-ink">
-      <Link
-        to="/"
-        className="flex items-center gap-2 text-lg font-bold text-inherit no-underline"
-        aria-label="Breathmark, all studies"
-      >
-        <BreathMark className="h-[26px] w-4 text-[var(--band-mark)]" />
-        Breathmark
-      </Link>
-      {study && (
+    <>
+      <PrintedHead study={study} reader={me.data?.person.name} />
+      <header className="flex min-h-12 flex-wrap items-center gap-x-5 gap-y-1.5 bg-band px-7 py-2 text-band-ink max-wide:px-4 print:hidden [&_:focus-visible]:outline-band-ink">
         <Link
-          to={study.to}
-          className="min-w-0 text-inherit no-underline hover:underline wide:border-l wide:border-band-rule wide:pl-5"
+          to="/"
+          className="flex items-center gap-2 text-lg font-bold text-inherit no-underline"
+          aria-label="Breathmark, all studies"
         >
-          <b className="mr-2 font-bold">{study.code}</b>
-          {study.title}
+          <BreathMark className="h-[26px] w-4 text-[var(--band-mark)]" />
+          Breathmark
         </Link>
-      )}
-      <div className="ml-auto flex min-w-0 flex-wrap items-center gap-x-5 gap-y-1 text-sm text-band-ink-2">
-        <SavedState />
-        {me.data && (
-          <span>
-            {me.data.person.name}
-            {rolesBeside(me.data.person.name, roles)}
-          </span>
+        {study && (
+          <Link
+            to={study.to}
+            className="min-w-0 text-inherit no-underline hover:underline wide:border-l wide:border-band-rule wide:pl-5"
+          >
+            <b className="mr-2 font-bold">{study.code}</b>
+            {study.title}
+          </Link>
         )}
-        <button
-          type="button"
-          onClick={() => setNight(!night)}
-          className="min-h-6 text-band-ink underline underline-offset-2"
-        >
-          {night ? 'Day' : 'Night'}
-          <span className="sr-only"> colours</span>
-        </button>
-        <button
-          type="button"
-          onClick={() => leaveAfterAsking(() => leave.mutateAsync())}
-          disabled={leave.isPending}
-          className="min-h-6 text-band-ink underline underline-offset-2"
-        >
-          {leave.isError ? 'Sign out: try again' : 'Sign out'}
-        </button>
-      </div>
-    </header>
+        <div className="ml-auto flex min-w-0 flex-wrap items-center gap-x-5 gap-y-1 text-sm text-band-ink-2">
+          <SavedState />
+          {me.data && (
+            <span>
+              {me.data.person.name}
+              {rolesBeside(me.data.person.name, roles)}
+            </span>
+          )}
+          <button
+            type="button"
+            onClick={() => setNight(!night)}
+            className="min-h-6 text-band-ink underline underline-offset-2"
+          >
+            {night ? 'Day' : 'Night'}
+            <span className="sr-only"> colours</span>
+          </button>
+          <button
+            type="button"
+            onClick={() => leaveAfterAsking(() => leave.mutateAsync())}
+            disabled={leave.isPending}
+            className="min-h-6 text-band-ink underline underline-offset-2"
+          >
+            {leave.isError ? 'Sign out: try again' : 'Sign out'}
+          </button>
+        </div>
+      </header>
+    </>
   )
 }

@@ -14,7 +14,7 @@ export const auditEventColumns = (open: (event: AuditEvent) => void): TableColum
     header: 'No.',
     value: (event) => event.position,
     cell: (event) => (
-      <LinkButton aria-haspopup="dialog" onClick={() => open(event)}>
+      <LinkButton aria-haspopup="dialog" className="prints" onClick={() => open(event)}>
         {formatCount(event.position)}
         <span className="sr-only">: open this event</span>
       </LinkButton>
