@@ -191,3 +191,9 @@ describe('a flag in words', () => {
     expect(verdict.reasons[0]!.words).toBe('Rested for 12 s before it; 30 s or longer is better.')
   })
 })
+
+test('readings that do not differ have a spread of nought, not of rounding', async () => {
+  const { result } = await foundIn(inventedTrace())
+  const session = { ...result.analytes[0]!, sdPpb: 3.6e-13, cvPercent: 5e-14 }
+  expect(sessionFacts(session)).toContainEqual({ term: 'SD of the accepted', value: '0 ppb' })
+})

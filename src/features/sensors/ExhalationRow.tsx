@@ -36,13 +36,12 @@ export function ExhalationRow({ exhalation, curve, gasAt, provenance }: Exhalati
   return (
     <section
       aria-label={`Exhalation ${formatCount(number)}`}
-      className="grid grid-cols-[78px_minmax(0,1fr)] rounded-[3px] border border-rule-2 tablet:grid-cols-[92px_minmax(0,1fr)_minmax(210px,0.62fr)]"
+      className="grid rounded-[3px] border border-rule tablet:grid-cols-[92px_minmax(0,1fr)_minmax(210px,0.62fr)]"
     >
-      <div className="border-r border-copper bg-margin px-3.5 py-3">
+      <div className="border-copper bg-margin px-3.5 py-3 max-tablet:flex max-tablet:items-baseline max-tablet:gap-3 max-tablet:border-b max-tablet:py-2 tablet:border-r">
         <p className="text-[34px] leading-none font-bold tracking-tight">{formatCount(number)}</p>
-        <p className="mt-2 text-xs leading-[1.45] text-ink-2">
-          at {formatConcentration(startS, 4)} s
-          <br />
+        <p className="text-xs leading-[1.45] text-ink-2 tablet:mt-2">
+          at {formatConcentration(startS, 4)} s <br className="max-tablet:hidden" />
           {formatConcentration(durationS, 3)} s long
         </p>
       </div>
@@ -70,10 +69,7 @@ export function ExhalationRow({ exhalation, curve, gasAt, provenance }: Exhalati
         </div>
       </div>
       <div
-        className={classes(
-          'min-w-0 border-rule px-4 py-3',
-          'max-tablet:col-span-2 max-tablet:border-t tablet:border-l',
-        )}
+        className={classes('min-w-0 border-rule px-4 py-3', 'max-tablet:border-t tablet:border-l')}
       >
         <ExhalationVerdict exhalation={exhalation} reading={reading} />
       </div>

@@ -26,16 +26,18 @@ export function ExhalationVerdict({ exhalation, reading }: ExhalationVerdictProp
             </span>
             <span>
               <span className="sr-only">{SIGNS[severity].spoken} </span>
-              {words}
+              {unbroken(words)}
               {severity !== 'pass' && <code className="ml-1.5 text-xs text-ink-2">{name}</code>}
             </span>
           </li>
         ))}
       </ul>
       {reading.meanPpb !== null && (
-        <p className={classes('mt-2.5 text-2xl font-bold', !kept && 'text-ink-2')}>
+        <p className={classes('mt-2.5 text-2xl leading-tight font-bold', !kept && 'text-ink-2')}>
           {formatConcentration(reading.meanPpb)}{' '}
-          <span className="text-[14px] font-normal text-ink-2">ppb, mean of the plateau</span>
+          <span className="text-[14px] font-normal whitespace-nowrap text-ink-2">
+            ppb, plateau mean
+          </span>
         </p>
       )}
       <dl className="mt-1 grid grid-cols-[max-content_minmax(0,1fr)] gap-x-3 gap-y-0.5 text-sm">
@@ -61,7 +63,9 @@ function valuesOf({ window, volumeMl, volumeBtpsMl }: Exhalation, reading: Readi
       : []),
     ...fact('SD', sdPpb, 'ppb'),
     ...fact('Change', changePercent, '%'),
-    ...fact('Less room air', gradientPpb, 'ppb'),
+    ...(gradientPpb === null
+      ? []
+      : [{ term: 'Less room air', value: `${amount4(gradientPpb)} ppb` }]),
     ...adjustedFact('At 5 % CO2', reading.co2Normalised),
     ...adjustedFact('Undiluted', reading.dilutionCorrected),
     ...(volumeBtpsMl === null
@@ -71,3 +75,6 @@ function valuesOf({ window, volumeMl, volumeBtpsMl }: Exhalation, reading: Readi
 }
 
 const amount4 = (value: number) => formatConcentration(value, 4)
+
+/** A unit stays with its number at the end of a line. */
+const unbroken = (words: string) => words.replaceAll(/(\d) (%|s\b|h\b|ppb|mL)/g, '$1\u00a0$2')

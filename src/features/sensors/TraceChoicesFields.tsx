@@ -34,7 +34,7 @@ export function TraceChoicesFields(props: TraceChoicesFieldsProps) {
         onChange={(subject) => onPicked({ ...picked, subject })}
       />
       <Segments
-        label="Session"
+        label="Session's value"
         options={[
           { value: 'median', label: 'median' },
           { value: 'pair', label: 'first two that agree' },

@@ -1,4 +1,4 @@
-import { useState } from 'react'
+import { useMemo, useState } from 'react'
 import { formatConcentration, formatCount } from '#shared/terms/numbers.ts'
 import { Button } from '../../ui/Button.tsx'
 import { EmptyPlace } from '../../ui/EmptyPlace.tsx'
@@ -12,6 +12,9 @@ import { sessionFacts, sessionSentence } from './traceSession.ts'
 
 type TraceFoundProps = {
   found: Extract<TraceOutcome, { refusal: null }>
+  /** The gas that somebody looks at; the first where the trace has no such gas. */
+  gas: string | null
+  onGas: (analyte: string) => void
   provenance: readonly string[]
 }
 
@@ -19,19 +22,28 @@ type TraceFoundProps = {
 const ROWS_AT_ONCE = 12
 
 /** Exhalations, one below the other, and then the session, for one gas at a time. */
-export function TraceFound({ found, provenance }: TraceFoundProps) {
+export function TraceFound({ found, gas, onGas, provenance }: TraceFoundProps) {
   const { result, curves } = found
-  const [wanted, setWanted] = useState<string | null>(null)
   const [rows, setRows] = useState(ROWS_AT_ONCE)
   const at = Math.max(
     0,
-    result.analytes.findIndex(({ analyte }) => analyte === wanted),
+    result.analytes.findIndex(({ analyte }) => analyte === gas),
   )
   const session = result.analytes[at]!
+  const isInvented = result.recording.instrumentSerial === 'invented'
+  const { algorithmVersion } = result
+  const standing = useMemo(
+    () => [
+      ...provenance,
+      `Read with version ${algorithmVersion} of the trace algorithm`,
+      ...(isInvented ? ['Invented: made from formulas'] : []),
+    ],
+    [provenance, algorithmVersion, isInvented],
+  )
   const hidden = result.exhalations.length - rows
   return (
     <div className="space-y-4">
-      {result.recording.instrumentSerial === 'invented' && (
+      {isInvented && (
         <Notice title="This trace is invented">
           It was made from formulas, to try the page with. Nobody breathed it.
         </Notice>
@@ -44,7 +56,7 @@ export function TraceFound({ found, provenance }: TraceFoundProps) {
             label: gasWords(analyte),
           }))}
           value={session.analyte}
-          onChange={setWanted}
+          onChange={onGas}
         />
       )}
       {result.exhalations.length === 0 && (
@@ -58,7 +70,7 @@ export function TraceFound({ found, provenance }: TraceFoundProps) {
           exhalation={exhalation}
           curve={curves[index]!}
           gasAt={at}
-          provenance={provenance}
+          provenance={standing}
         />
       ))}
       {hidden > 0 && (
@@ -78,8 +90,9 @@ export function TraceFound({ found, provenance }: TraceFoundProps) {
         <Facts layout="rows" items={sessionFacts(session)} />
         <p className="mt-3 max-w-[68ch] text-sm text-ink-2">
           {formatCount(result.samples)} samples, {formatConcentration(result.intervalS)} s apart,
-          read by version {result.algorithmVersion} of the trace algorithm; not stored. The other
-          limits are the defaults that a study's protocol begins with.
+          read by version {algorithmVersion} of the trace algorithm; not stored. Limits on flow,
+          pressure, duration and slope follow the ATS/ERS 2005 recommendations for exhaled nitric
+          oxide; the others are design choices. A study's protocol begins with the same ones.
         </p>
       </section>
     </div>

@@ -62,6 +62,8 @@ type TraceStateProps = {
 }
 
 function TraceState({ work, isReady, provenance }: TraceStateProps) {
+  // Stays while a trace is read anew for another choice.
+  const [gas, setGas] = useState<string | null>(null)
   if (!isReady)
     return (
       <Notice tone="warn" title="Not read yet">
@@ -77,7 +79,8 @@ function TraceState({ work, isReady, provenance }: TraceStateProps) {
     )
   if (work.state !== 'done') return <BesideProgress label="Reading the trace" work={work} />
   const { outcome } = work
-  if (outcome.refusal === null) return <TraceFound found={outcome} provenance={provenance} />
+  if (outcome.refusal === null)
+    return <TraceFound found={outcome} gas={gas} onGas={setGas} provenance={provenance} />
   const { line, column, reason } = outcome.refusal
   return (
     <Notice tone="stop" title="This file cannot be read as a breath trace">

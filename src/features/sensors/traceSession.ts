@@ -4,6 +4,9 @@ import { formatConcentration, formatCount } from '#shared/terms/numbers.ts'
 
 const { fewestAccepted, agreePercent, agreePpb, agreePpbBelow, agreePpbGases } = defaultSettings
 
+/** Far below what any sensor can tell apart. */
+const ROUNDING_PERCENT = 1e-9
+
 const ppb = (value: number) => `${formatConcentration(value)} ppb`
 
 /** What the session's value stands on, or what is still needed for one. */
@@ -34,7 +37,11 @@ function listed(words: readonly string[]): string {
 
 /** The session of one gas in terms and numbers with their units. */
 export function sessionFacts(session: AnalyteSession): { term: string; value: string }[] {
-  const { uncertainty, sdPpb, cvPercent, gradientPpb, roomAirPpb, firstPair } = session
+  const { uncertainty, gradientPpb, roomAirPpb, firstPair } = session
+  // Equal readings differ by the rounding of their means alone.
+  const isEqual = session.cvPercent !== null && session.cvPercent < ROUNDING_PERCENT
+  const sdPpb = isEqual ? 0 : session.sdPpb
+  const cvPercent = isEqual ? 0 : session.cvPercent
   return [
     { term: 'Exhalations accepted', value: formatCount(session.nAccepted) },
     { term: 'SD of the accepted', value: sdPpb === null ? 'needs two' : ppb(sdPpb) },
