@@ -110,7 +110,11 @@ export async function findAllowed(
   const found = vouched[0]
   if (!found) throw new AppError('not-found')
 
-  const memberships: Membership[] = vouched.map(({ role, duty, siteId }) => ({ role, duty, siteId }))
+  const memberships: Membership[] = vouched.map(({ role, duty, siteId }) => ({
+    role,
+    duty,
+    siteId,
+  }))
   const released = found.kind === 'earlierData' || found.releasedAt !== null
   const circumstances = {
     kind: found.kind,

@@ -74,16 +74,14 @@ describe('a body', () => {
 
   test('with fields that nobody asked for stores none of them', async () => {
     const { study, client } = await nurseAt()
-    const response = await client
-      .post(address(study))
-      .send({
-        id: aKey(),
-        sex: 'F',
-        ageBand: '50-54',
-        code: 'N04-0000-0',
-        siteId: study.south.id,
-        studyId: aKey(),
-      })
+    const response = await client.post(address(study)).send({
+      id: aKey(),
+      sex: 'F',
+      ageBand: '50-54',
+      code: 'N04-0000-0',
+      siteId: study.south.id,
+      studyId: aKey(),
+    })
     expect(response.status).toBe(201)
     expect(response.body.siteName).toBe('North ward')
     expect(response.body.code).not.toBe('N04-0000-0')

@@ -36,6 +36,8 @@ test('bad input on the study form keeps what was typed and leads to the field', 
 }) => {
   const page = await pageOf('study-lead')
   await page.goto('/studies/new')
+  // Blank fields are nothing to lose.
+  await expect(page.getByText('All saved', { exact: true })).toBeVisible()
   await page.getByLabel('Title').fill('Ammonia in breath')
   await page.getByLabel('Short name').fill('not a short name')
   await page.getByLabel('Planned cut-off').fill('1,5')
@@ -194,6 +196,15 @@ test('a coordinator is refused the closed part of a report, on the page and at i
   const refused = await lead.request.get(address)
   expect(refused.status()).toBe(403)
   expect(await refused.json()).toMatchObject({ code: 'not-allowed' })
+
+  // The attempt stands in the trail, in words.
+  await monitor.goto(`/studies/${studyId}/review`)
+  await expect(
+    monitor
+      .getByRole('row', { name: /Attempt refused/ })
+      .filter({ hasText: 'would have been “Closed part of a report opened”' })
+      .first(),
+  ).toBeVisible()
 })
 
 test('an address that asks for what a table does not have leads back to all rows', async ({

@@ -5,7 +5,7 @@ test('somebody signs in at the provider, is known by name, and signs out at both
   context,
 }) => {
   await signIn(page, 'north-bedside')
-  await expect(page.getByText('Coordinator, bedside, North ward').first()).toBeVisible()
+  await expect(page.getByRole('banner').getByText('Coordinator, bedside, North ward')).toBeVisible()
 
   await page.getByRole('button', { name: /sign out/i }).click()
   await page.getByRole('button', { name: 'Sign out' }).click()
