@@ -83,11 +83,11 @@ function TraceState({ work, isReady, provenance }: TraceStateProps) {
     return <TraceFound found={outcome} gas={gas} onGas={setGas} provenance={provenance} />
   const { line, column, reason } = outcome.refusal
   return (
-    <Notice tone="stop" title="This file cannot be read as a breath trace">
+    <Notice tone="stop" title="This cannot be read as a breath trace">
       <p>
         Line {formatCount(line)}, column {formatCount(column)}: {reason}
       </p>
-      <p className="mt-1">Nothing of it was used. Mend the file and give it again.</p>
+      <p className="mt-1">Nothing of it was used. Mend it and give it again.</p>
     </Notice>
   )
 }
