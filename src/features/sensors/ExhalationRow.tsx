@@ -41,7 +41,7 @@ export function ExhalationRow({ exhalation, curve, gasAt, provenance }: Exhalati
       <div className="border-copper bg-margin px-3.5 py-3 max-tablet:flex max-tablet:items-baseline max-tablet:gap-3 max-tablet:border-b max-tablet:py-2 tablet:border-r">
         <p className="text-[34px] leading-none font-bold tracking-tight">{formatCount(number)}</p>
         <p className="text-xs leading-[1.45] text-ink-2 tablet:mt-2">
-          at {formatConcentration(startS, 4)} s <br className="max-tablet:hidden" />
+          at {formatConcentration(startS, 4)} s, <br className="max-tablet:hidden" />
           {formatConcentration(durationS, 3)} s long
         </p>
       </div>
