@@ -15,6 +15,7 @@ import { ErrorSummary, type SummaryEntry } from './ErrorSummary.tsx'
 import { FormContext, type FormParts } from './formContext.ts'
 import { type FormSchema, formResolver } from './formResolver.ts'
 import { useUnsavedWork } from './UnsavedWork.tsx'
+import { useChanged } from './useChanged.ts'
 
 type FormProps<S extends FormSchema, Answer> = {
   schema: S
@@ -58,8 +59,9 @@ export function Form<S extends FormSchema, Answer>(props: FormProps<S, Answer>) 
     defaultValues: props.defaultValues,
     shouldFocusError: false,
   })
-  const { errors, isDirty, isSubmitting } = form.formState
-  const letGo = useUnsavedWork(guard && isDirty && locked === undefined)
+  const { errors, isSubmitting } = form.formState
+  const [changed, settle] = useChanged(form)
+  const letGo = useUnsavedWork(guard && changed && locked === undefined)
 
   // After every commit: the errors of a refused form arrive one commit later than the refusal.
   useEffect(() => {
@@ -86,6 +88,7 @@ export function Form<S extends FormSchema, Answer>(props: FormProps<S, Answer>) 
       try {
         const answer = await onSubmit(values)
         form.reset(undefined, { keepValues: true })
+        settle()
         letGo()
         onSaved?.(answer)
       } catch (error) {
