@@ -7,7 +7,7 @@ import { Dialog } from '../../ui/Dialog.tsx'
 import { Facts } from '../../ui/Facts.tsx'
 import { InstantText } from '../../ui/InstantText.tsx'
 import { StaticTable } from '../../ui/StaticTable.tsx'
-import { standingOf } from './auditEventWords.ts'
+import { recordInWords, standingOf } from './auditEventWords.ts'
 
 type AuditEventDialogProps = { event: AuditEvent | null; onClose: () => void }
 
@@ -54,9 +54,7 @@ function factsOf(event: AuditEvent) {
   const facts = [
     {
       term: 'Record',
-      value: [auditRecordLabel(event.recordType), event.recordLabel, event.siteName]
-        .filter(Boolean)
-        .join(', '),
+      value: [auditRecordLabel(event.recordType), recordInWords(event)].filter(Boolean).join(', '),
     },
     { term: 'Who', value: [event.personName, standingOf(event)].filter(Boolean).join(', ') },
     { term: 'When', value: <InstantText at={event.receivedAt} precision="second" /> },

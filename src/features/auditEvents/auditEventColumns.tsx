@@ -5,7 +5,7 @@ import { InstantText } from '../../ui/InstantText.tsx'
 import { LinkButton } from '../../ui/LinkButton.tsx'
 import { Tag } from '../../ui/Tag.tsx'
 import type { TableColumn } from '../../ui/tableColumn.ts'
-import { standingOf, valuesInWords } from './auditEventWords.ts'
+import { recordInWords, standingOf, valuesInWords } from './auditEventWords.ts'
 
 /** @param open shows everything that an event keeps */
 export const auditEventColumns = (open: (event: AuditEvent) => void): TableColumn<AuditEvent>[] => [
@@ -46,10 +46,7 @@ export const auditEventColumns = (open: (event: AuditEvent) => void): TableColum
     header: 'Record',
     value: (event) => event.recordLabel,
     cell: (event) => (
-      <Lines
-        first={auditRecordLabel(event.recordType)}
-        second={[event.recordLabel, event.siteName].filter(Boolean).join(', ')}
-      />
+      <Lines first={auditRecordLabel(event.recordType)} second={recordInWords(event)} />
     ),
   },
   {

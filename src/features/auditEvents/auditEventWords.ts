@@ -1,5 +1,7 @@
 import type { Duty, Role } from '#shared/policy/people.ts'
+import { ACTIONS, type Action, type PolicyRow, policyRow } from '#shared/policy/permissions.ts'
 import type { AuditEvent, AuditValue } from '#shared/schemas/auditEvent.ts'
+import { auditEventLabel } from '#shared/terms/auditEvents.ts'
 import { formatCount } from '#shared/terms/numbers.ts'
 import { DUTY_LABELS, ROLE_LABELS } from '#shared/terms/team.ts'
 
@@ -12,6 +14,19 @@ export function standingOf({ role, duty, personSiteName }: AuditEvent): string {
   ]
     .filter(Boolean)
     .join(', ')
+}
+
+/** Which record an event speaks of, and where; a refused attempt says what it would have been. */
+export function recordInWords({ event, recordLabel, siteName }: AuditEvent): string {
+  const label = event === 'attempt.refused' && recordLabel ? attemptOf(recordLabel) : recordLabel
+  return [label, siteName].filter(Boolean).join(', ')
+}
+
+function attemptOf(action: string): string {
+  const row: PolicyRow | undefined = ACTIONS.includes(action as Action)
+    ? policyRow(action as Action)
+    : undefined
+  return row?.records ? `would have been “${auditEventLabel(row.records)}”` : action
 }
 
 /** What an event keeps, in a few words. */
