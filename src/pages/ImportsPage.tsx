@@ -13,7 +13,8 @@ import { Sheet } from '../ui/Sheet.tsx'
 /** The files that were brought into a study of earlier data. */
 export default function ImportsPage() {
   const study = useStudy()
-  const imports = useQuery(importsQuery(study.id))
+  const mayList = useMay('import.list')
+  const imports = useQuery({ ...importsQuery(study.id), enabled: mayList })
   const mayOpen = useMay('import.read')
   const mayUpload = useMay('import.upload')
   const columns = useMemo(() => importColumns(mayOpen), [mayOpen])
@@ -42,21 +43,27 @@ export default function ImportsPage() {
           </>
         }
       >
-        <DataTable
-          caption="Imports"
-          hideCaption
-          columns={columns}
-          rows={imports.data}
-          rowId={(row) => row.id}
-          status={imports}
-          empty={
-            <EmptyPlace title="No file has been brought in yet" action={bringIn || undefined}>
-              {mayUpload
-                ? 'A CSV with one row a subject or a session: an identifier, what the sensor measured, and the reference.'
-                : 'The study lead brings files in.'}
-            </EmptyPlace>
-          }
-        />
+        {!mayList ? (
+          <EmptyPlace title="Imports are not open to your place in this study">
+            The study lead brings files in and can say what became of them.
+          </EmptyPlace>
+        ) : (
+          <DataTable
+            caption="Imports"
+            hideCaption
+            columns={columns}
+            rows={imports.data}
+            rowId={(row) => row.id}
+            status={imports}
+            empty={
+              <EmptyPlace title="No file has been brought in yet" action={bringIn || undefined}>
+                {mayUpload
+                  ? 'A CSV with one row a subject or a session: an identifier, what the sensor measured, and the reference.'
+                  : 'The study lead brings files in.'}
+              </EmptyPlace>
+            }
+          />
+        )}
       </Sheet>
     </>
   )
