@@ -27,6 +27,7 @@ export function serve(app: Express, route: Route): void {
 
 async function answer(route: Route, request: Request, response: Response): Promise<void> {
   const actor = await signedInActor(request)
+  refuseForSomebodyElse(request, actor)
   const allowed = await admitted(route, request, actor)
   refuseWhereLocked(route, allowed)
   const result = await route.handle({
@@ -39,6 +40,12 @@ async function answer(route: Route, request: Request, response: Response): Promi
   })
   if (route.returns) response.status(route.status ?? 200).json(route.returns.parse(result))
   else sendFile(response, result as FileAnswer)
+}
+
+/** A page that one person opened never writes under the name of another who signed in since. */
+function refuseForSomebodyElse(request: Request, actor: Actor): void {
+  const opener = request.get('x-breathmark-person')
+  if (opener !== undefined && opener !== actor.personId) throw new AppError('somebody-else')
 }
 
 /** Permission first: whoever may not do this learns nothing from what is wrong with the input. */

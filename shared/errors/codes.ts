@@ -9,6 +9,10 @@ export const ERROR_CODES = {
   'not-found': [404, 'There is nothing here, or you have no access to it.'],
   'no-such-route': [404, 'There is no such address.'],
   'changed-meanwhile': [409, 'Somebody changed this meanwhile. Look at both versions and choose.'],
+  'somebody-else': [
+    409,
+    'Somebody else has signed in in this browser since you opened this page. Nothing was changed.',
+  ],
   'already-exists': [409, 'This already exists.'],
   'not-in-this-state': [409, 'This cannot be done in the present state.'],
   'wrong-kind-of-study': [409, 'This does not apply to this kind of study.'],

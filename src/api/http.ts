@@ -1,6 +1,7 @@
 import type { z } from 'zod'
 import { ApiError, refusalFrom, unreachable } from './ApiError.ts'
 import { noteAnswer } from './lastAnswer.ts'
+import { openerHeader } from './opener.ts'
 import { tellSignedOut } from './signedOut.ts'
 
 export type Method = 'get' | 'post' | 'put' | 'patch' | 'delete'
@@ -20,7 +21,11 @@ export type RequestOptions = {
  * A page of another origin cannot set these headers, so a write that carries them came from here. The
  * offset from UTC goes to the audit trail beside the server's own time.
  */
-const writeHeaders = () => ({ 'x-breathmark': '1', 'x-breathmark-offset': localOffset(new Date()) })
+const writeHeaders = () => ({
+  'x-breathmark': '1',
+  'x-breathmark-offset': localOffset(new Date()),
+  ...openerHeader(),
+})
 
 function localOffset(now: Date): string {
   const minutes = -now.getTimezoneOffset()

@@ -2,6 +2,7 @@ import { queryOptions } from '@tanstack/react-query'
 import { type Me, me } from '#shared/schemas/me.ts'
 import { ApiError } from './ApiError.ts'
 import { request } from './http.ts'
+import { noteOpener } from './opener.ts'
 
 const meKey = ['me'] as const
 
@@ -22,6 +23,7 @@ export const meQuery = queryOptions({
         message: `${now.person.name} is signed in now.`,
         more: { name: now.person.name },
       })
+    noteOpener(now.person.id)
     return now
   },
   staleTime: 60_000,

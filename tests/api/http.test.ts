@@ -97,6 +97,22 @@ describe('a body', () => {
   })
 })
 
+test('a page that somebody else opened writes nothing under another name', async () => {
+  const study = await api.given.study()
+  const nurse = await api.given.member(study, { role: 'coordinator', site: study.north })
+  const post = (person: string) =>
+    api
+      .as(nurse)
+      .post(`/api/sites/${study.north.id}/subjects`)
+      .set('x-breathmark-person', person)
+      .send({ id: aKey(), sex: 'F', ageBand: '50-54' })
+  const refused = await post(aKey())
+  expect(refused.status).toBe(409)
+  expect(refused.body.code).toBe('somebody-else')
+  expect(await api.auditEvents(study.id)).toEqual([])
+  expect((await post(nurse.id)).status).toBe(201)
+})
+
 test('an address with a broken escape answers 404 and not a fault', async () => {
   const person = await api.given.person()
   const { status } = await api.as(person).get('/api/subjects/%E0%A4%A')
