@@ -139,6 +139,25 @@ test('writers without a study are the named ones', () => {
   ])
 })
 
+test('every statistic is reached by a screen, a report or a job', () => {
+  const reached = new Set<string>()
+  const walk = (file: string) => {
+    if (reached.has(file)) return
+    reached.add(file)
+    for (const { to } of imports.filter(({ from }) => from === file)) walk(to)
+  }
+  // Workers and threads are started by their address, which no import shows.
+  const starts = files.filter((file) =>
+    /(^src\/app\/main\.tsx|^server\/main\.ts|[tT]hread\.ts|[wW]orker\.ts)$/.test(file),
+  )
+  for (const file of starts) walk(file)
+  const statistics = files.filter(
+    (file) => file.startsWith('shared/statistics/') && !file.endsWith('.d.ts'),
+  )
+  expect(statistics.length).toBeGreaterThan(100)
+  expect(statistics.filter((file) => !reached.has(file))).toEqual([])
+})
+
 test('no import goes round in a circle', () => {
   const graph = new Map<string, string[]>()
   for (const { from, to, typeOnly } of imports)
