@@ -86,9 +86,26 @@ test('a subarachnoid-haemorrhage series goes from its file to the PDF with the p
   await expect(
     analyst.getByRole('heading', { name: /0\.731\s*\(0\.630 to 0\.833\)/ }),
   ).toBeVisible()
+  // Package pROC's own tests: s100b against ndka, paired DeLong, p = 0.1643.
+  await analyst.goto(`/studies/${studyId}/results/compare`)
+  for (const marker of ['S100B', 'NDKA']) await analyst.getByLabel(marker, { exact: true }).check()
+  await analyst.getByLabel('Title').fill('S100B against NDKA')
+  await analyst.getByRole('button', { name: 'Compute and store' }).click()
+  await expect(analyst.getByText(/0\.164/).first()).toBeVisible({ timeout: 60_000 })
+  // R's glm on s100b and ndka as they are; the area shown first is the corrected one.
+  await analyst.goto(`/studies/${studyId}/results/panel`)
+  for (const marker of ['S100B', 'NDKA']) await analyst.getByLabel(marker, { exact: true }).check()
+  await analyst.getByLabel('As they are').check()
+  await analyst.getByLabel('Title').fill('Panel of S100B and NDKA')
+  await analyst.getByRole('button', { name: 'Compute and store' }).click()
+  await expect(analyst.getByRole('heading', { name: /[Cc]orrected/ }).first()).toBeVisible({
+    timeout: 60_000,
+  })
+  await expect(analyst.getByText(/5\.33/).first()).toBeVisible()
   await issueReport(analyst, studyId)
 
   const closed = await openPart(monitor, studyId, 'closed')
+  expect(closed).toMatch(/0\.164/)
   expect(closed).toMatch(/0\.731\s*\(0\.630 to 0\.833\)/)
   expect(closed).toMatch(/research use only/i)
   const open = await openPart(lead, studyId, 'open')

@@ -157,6 +157,8 @@ export async function storeAnalysis(page: Page): Promise<void> {
     .getByRole('button', { name: 'Store it' })
     .click()
   await page.waitForURL(/\/results\/[0-9a-f-]{36}/)
+  // Long computations run beside the request: the page shows their progress, then the result.
+  await expect(page.getByRole('button', { name: 'Run it again' })).toBeVisible({ timeout: 90_000 })
 }
 
 /** Issues a report of everything stored, and waits until both parts can be opened. */
