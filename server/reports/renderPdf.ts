@@ -74,7 +74,7 @@ function provenanceContent(document: ReportDocument): Content[] {
 }
 
 /** A section; headlines hold on to the figure or caution under them. */
-function sectionContent({ heading, blocks }: ReportSection): Content {
+function sectionContent({ heading, newPage = false, blocks }: ReportSection): Content {
   const content: Content[] = []
   let held: Content[] = [sectionHeadline(heading)]
   for (const block of blocks) {
@@ -89,8 +89,11 @@ function sectionContent({ heading, blocks }: ReportSection): Content {
     )
     held = []
   }
-  return [...content, ...held]
+  const [first, ...rest] = [...content, ...held]
+  // Asked of the first thing itself: an empty one in between could end up alone on a page.
+  return [newPage ? ({ stack: [first], pageBreak: 'before' } as Content) : first!, ...rest]
 }
+
 function sectionHeadline(heading: string): Content {
   return styledText(heading, {
     fontSize: SIZE.heading,

@@ -33,8 +33,6 @@ export function blockContent(block: ReportBlock): Content {
       return figureContent(block)
     case 'caution':
       return cautionBox(block, SIZE.table)
-    case 'pageBreak':
-      return { text: '', pageBreak: 'after' }
   }
 }
 

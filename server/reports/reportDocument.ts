@@ -42,6 +42,8 @@ export interface ReportPair {
 
 export interface ReportSection {
   heading: string
+  /** Begins on a page of its own. */
+  newPage?: boolean
   blocks: readonly ReportBlock[]
 }
 
@@ -52,7 +54,6 @@ export type ReportBlock =
   | ReportTable
   | ReportFigure
   | ({ kind: 'caution' } & ReportCaution)
-  | { kind: 'pageBreak' }
 
 export interface ReportTable {
   kind: 'table'

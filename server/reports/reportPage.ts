@@ -65,7 +65,7 @@ export function provenancePlaces({ caution, provenance }: ReportDocument): {
 }
 
 /** Room for part and stamp in the page's header, in points. */
-const HEADER_RIGHT = 190
+const HEADER_RIGHT = 250
 
 /** Study and title on the left, part and stamp on the right, a line below. */
 export function pageHeader({ header, title }: ReportDocument, page: number): Content {

@@ -16,17 +16,12 @@ import { panelBlocks } from './panelBlocks.tsx'
 import { precisionBlocks } from './precisionBlocks.ts'
 import { reportFrame, shownOfRun } from './reportFrame.ts'
 
-const NEW_PAGE: ReportBlock = { kind: 'pageBreak' }
-
 /** The part for oversight and analysts: each chosen stored analysis with its figures and numbers. */
 export function closedPart(source: ReportSource): ReportDocument {
   return reportFrame(source, 'closed', [
     summarySection(source),
     methodsSection(source),
-    ...source.analyses.map((analysis, at) => {
-      const isLast = at === source.analyses.length - 1
-      return analysisSection(source, analysis, isLast ? [] : [NEW_PAGE])
-    }),
+    ...source.analyses.map((analysis) => analysisSection(source, analysis)),
   ])
 }
 
@@ -85,14 +80,11 @@ function headlineText(result: AnalysisResult): string {
 const differenceOf = (result: AnalysisResult) =>
   result.kind === 'comparison' ? { difference: result.comparisons[0]?.difference ?? null } : {}
 
-function analysisSection(
-  source: ReportSource,
-  analysis: StoredAnalysis,
-  end: readonly ReportBlock[],
-): ReportSection {
+function analysisSection(source: ReportSource, analysis: StoredAnalysis): ReportSection {
   return {
     heading: `${analysis.number}. ${analysis.title}`,
-    blocks: [...analysisFacts(source, analysis), ...resultBlocks(source, analysis), ...end],
+    newPage: true,
+    blocks: [...analysisFacts(source, analysis), ...resultBlocks(source, analysis)],
   }
 }
 
@@ -123,7 +115,6 @@ function methodsSection({ analyses }: ReportSource): ReportSection {
   const versions = [...new Set(analyses.map((analysis) => analysis.statisticsVersion))].join(', ')
   const blocks: ReportBlock[] = [
     { kind: 'paragraph', text: `Computed with statistics version ${versions}.` },
-    NEW_PAGE,
   ]
   if (rows.length > 0)
     blocks.unshift({ kind: 'table', columns: [{ label: 'Method' }, { label: 'Source' }], rows })

@@ -20,9 +20,9 @@ export function reportFrame(
   const caution = CAUTIONS[dataset.protocol.regulatoryStatus]
   return {
     title: report.title,
-    subtitle: SUBTITLES[part],
+    subtitle: `${study.code}: ${study.title}. ${SUBTITLES[part]}`,
     header: {
-      study: `${study.code}  ${study.title}`,
+      study: study.code,
       part: REPORT_PART_LABELS[part],
       ...stampOf(study),
     },
