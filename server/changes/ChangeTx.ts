@@ -1,6 +1,7 @@
 import { eq, getTableColumns, getTableName, sql } from 'drizzle-orm'
 import type { MySqlColumn, MySqlTable } from 'drizzle-orm/mysql-core'
 import type { Database, Reader } from '#db/client.ts'
+import { datasetRows } from '#db/schema/datasetRows.ts'
 import { studyGuards } from '#db/schema/studyGuards.ts'
 import { AppError } from '#shared/errors/AppError.ts'
 import { policyRow } from '#shared/policy/permissions.ts'
@@ -65,7 +66,11 @@ export class ChangeTx {
       const part = records.slice(from, from + ROWS_AT_A_TIME)
       const byTable = new Map<RecordTable, Row[]>()
       for (const { rows } of part)
-        for (const [table, row] of rows) byTable.set(table, [...(byTable.get(table) ?? []), row])
+        for (const [table, row] of rows) {
+          const together = byTable.get(table)
+          if (together) together.push(row)
+          else byTable.set(table, [row])
+        }
       for (const [table, rows] of byTable) await insertMany(this.#database, table, rows as never[])
       for (const { rows, ...record } of part)
         this.happenings.push({
@@ -134,18 +139,20 @@ export class ChangeTx {
 
   /** Inserts rows that are not records (pieces of files, jobs, mails); the trail does not list them. */
   async put<T extends PassingTable>(table: T, rows: T['$inferInsert'][]): Promise<void> {
-    if (!PASSING_TABLES.includes(table)) throw new Error(`${getTableName(table)} is audited.`)
-    await insertMany(this.#database, table, rows)
+    await insertMany(this.#database, requirePassing(table), rows)
+  }
+
+  /** Changes and removes rows that are not records. */
+  passing() {
+    return {
+      update: <T extends PassingTable>(table: T) => this.#database.update(requirePassing(table)),
+      delete: <T extends PassingTable>(table: T) => this.#database.delete(requirePassing(table)),
+    }
   }
 
   /** Frozen rows of a dataset: the manifest's hash stands for them in the trail. */
-  async freeze<T extends MySqlTable>(table: T, rows: T['$inferInsert'][]): Promise<void> {
-    await insertMany(this.#database, table, rows)
-  }
-
-  /** The database for statements on passing tables beyond put(). */
-  passing(): Pick<Database, 'update' | 'delete'> {
-    return this.#database
+  async freeze(rows: (typeof datasetRows.$inferInsert)[]): Promise<void> {
+    await insertMany(this.#database, datasetRows, rows)
   }
 
   /** Notes something that happened without a value changing, such as a download. */
@@ -181,6 +188,12 @@ export class ChangeTx {
     if (!row || (row.studyId ?? row.id) !== this.allowed.studyId) throw new AppError('not-found')
     return row
   }
+}
+
+/** A record of a study would slip past the trail here. */
+function requirePassing<T extends PassingTable>(table: T): T {
+  if (!PASSING_TABLES.includes(table)) throw new Error(`${getTableName(table)} is audited.`)
+  return table
 }
 
 function newValues(table: MySqlTable, row: Row): FieldChange[] {

@@ -1,4 +1,3 @@
-import type { Request, Response } from 'express'
 import type { z } from 'zod'
 import type { Actor } from '#server/changes/actor.ts'
 import type { Allowed, Of } from '#server/changes/targets.ts'
@@ -66,5 +65,3 @@ export function route<
 ): Route {
   return definition as unknown as Route
 }
-
-export type Handler = (request: Request, response: Response) => Promise<void>

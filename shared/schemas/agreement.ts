@@ -142,7 +142,6 @@ export const correlationFigures = z.object({
   rankCorrelation: estimate.extend({ estimate: z.number() }),
   p: bound,
 })
-export type CorrelationFigures = z.infer<typeof correlationFigures>
 
 export const correlationResult = correlationFigures.extend({
   kind: z.literal('correlation'),

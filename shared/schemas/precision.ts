@@ -95,4 +95,3 @@ export const precisionExplored = z.object({
   result: precisionResult,
   caution,
 })
-export type PrecisionExplored = z.infer<typeof precisionExplored>

@@ -21,7 +21,6 @@ export const reportFile = z.object({
   bytes: z.number().int(),
   storedAt: instant,
 })
-export type ReportFile = z.infer<typeof reportFile>
 
 export const report = z.object({
   id,

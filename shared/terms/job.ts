@@ -2,4 +2,3 @@ export const JOB_KINDS = ['import.preview', 'import.enter', 'report.write', 'ana
 export type JobKind = (typeof JOB_KINDS)[number]
 
 export const JOB_STATES = ['queued', 'running', 'done', 'failed', 'cancelled'] as const
-export type JobState = (typeof JOB_STATES)[number]

@@ -9,6 +9,7 @@ import { referenceQuery } from '../features/reference/reference.api.ts'
 import { measuredAnalytes, referenceColumns } from '../features/reference/referenceColumns.tsx'
 import { sitesQuery } from '../features/sites/sites.api.ts'
 import { useMay } from '../features/studies/useMay.ts'
+import { CodeAndSiteFilter } from '../features/subjects/CodeAndSiteFilter.tsx'
 import { ButtonLink } from '../ui/ButtonLink.tsx'
 import { Caution } from '../ui/Caution.tsx'
 import { DataTable } from '../ui/DataTable.tsx'
@@ -16,7 +17,7 @@ import { EmptyPlace } from '../ui/EmptyPlace.tsx'
 import { Facts } from '../ui/Facts.tsx'
 import { PageHead } from '../ui/PageHead.tsx'
 import { Sheet } from '../ui/Sheet.tsx'
-import { TableChoice, TableSearch } from '../ui/TableFilters.tsx'
+import { TableChoice } from '../ui/TableFilters.tsx'
 import { useTableParams } from '../ui/useTableParams.ts'
 
 const FILTERS = ['code', 'siteId', 'outcome'] as const
@@ -97,15 +98,7 @@ function ReferenceList() {
         filters={
           study.counts.subjects > 0 ? (
             <>
-              <TableSearch params={params} name="code" label="Subject code" />
-              {severalSites && (
-                <TableChoice
-                  params={params}
-                  name="siteId"
-                  label="Site"
-                  options={(sites.data ?? []).map(({ id, name }) => ({ value: id, label: name }))}
-                />
-              )}
+              <CodeAndSiteFilter params={params} sites={sites.data ?? []} />
               <TableChoice
                 params={params}
                 name="outcome"

@@ -7,13 +7,13 @@ import { sessionColumns } from '../features/sessions/sessionColumns.tsx'
 import { sessionsQuery } from '../features/sessions/sessions.api.ts'
 import { sitesQuery } from '../features/sites/sites.api.ts'
 import { useMay } from '../features/studies/useMay.ts'
+import { CodeAndSiteFilter } from '../features/subjects/CodeAndSiteFilter.tsx'
 import { ButtonLink } from '../ui/ButtonLink.tsx'
 import { Caution } from '../ui/Caution.tsx'
 import { DataTable } from '../ui/DataTable.tsx'
 import { EmptyPlace } from '../ui/EmptyPlace.tsx'
 import { PageHead } from '../ui/PageHead.tsx'
 import { Sheet } from '../ui/Sheet.tsx'
-import { TableChoice, TableSearch } from '../ui/TableFilters.tsx'
 import { useTableParams } from '../ui/useTableParams.ts'
 
 const FILTERS = ['code', 'siteId'] as const
@@ -82,17 +82,7 @@ function Sessions() {
         scroll={columns.length > WIDE_FROM}
         filters={
           study.counts.sessions > 0 ? (
-            <>
-              <TableSearch params={params} name="code" label="Subject code" />
-              {severalSites && (
-                <TableChoice
-                  params={params}
-                  name="siteId"
-                  label="Site"
-                  options={(sites.data ?? []).map(({ id, name }) => ({ value: id, label: name }))}
-                />
-              )}
-            </>
+            <CodeAndSiteFilter params={params} sites={sites.data ?? []} />
           ) : undefined
         }
         empty={

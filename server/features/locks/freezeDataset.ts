@@ -1,6 +1,5 @@
 import { setImmediate as letOthersRun } from 'node:timers/promises'
 import { newId } from '#db/id.ts'
-import { datasetRows } from '#db/schema/datasetRows.ts'
 import { datasets } from '#db/schema/datasets.ts'
 import type { ChangeTx } from '#server/changes/ChangeTx.ts'
 import { canonicalJson, sha256Hex } from '#server/changes/hash.ts'
@@ -76,7 +75,7 @@ async function writeRows(
       hash: sha256Hex(canonicalJson(row)),
     }))
     hashes.push(...frozen.map((each) => each.hash))
-    await tx.freeze(datasetRows, frozen)
+    await tx.freeze(frozen)
     await letOthersRun()
   }
   return hashes

@@ -23,7 +23,6 @@ const columns = {
   lockedAt: studyGuards.lockedAt,
 }
 export type StudyRow = Awaited<ReturnType<typeof getStudy>>
-export type StudyCounts = Awaited<ReturnType<typeof countStudy>>
 
 /** One study. @throws AppError not-found */
 export async function getStudy(read: Reader, studyId: string) {

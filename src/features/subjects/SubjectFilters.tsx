@@ -1,27 +1,13 @@
 import { SEX_LABELS, SEXES } from '#shared/terms/subject.ts'
-import { TableChoice, TableSearch, TableToggle } from '../../ui/TableFilters.tsx'
-import type { TableParams } from '../../ui/useTableParams.ts'
+import { TableChoice, TableToggle } from '../../ui/TableFilters.tsx'
+import { CodeAndSiteFilter, type CodeAndSiteFilterProps } from './CodeAndSiteFilter.tsx'
 
 export const SUBJECT_FILTERS = ['code', 'siteId', 'sex', 'needs'] as const
 
-type SubjectFiltersProps = {
-  params: TableParams
-  /** The sites to choose from; of one site there is nothing to choose. */
-  sites: readonly { id: string; name: string }[]
-}
-
-export function SubjectFilters({ params, sites }: SubjectFiltersProps) {
+export function SubjectFilters({ params, sites }: CodeAndSiteFilterProps) {
   return (
     <>
-      <TableSearch params={params} name="code" label="Subject code" />
-      {sites.length > 1 && (
-        <TableChoice
-          params={params}
-          name="siteId"
-          label="Site"
-          options={sites.map(({ id, name }) => ({ value: id, label: name }))}
-        />
-      )}
+      <CodeAndSiteFilter params={params} sites={sites} />
       <TableChoice
         params={params}
         name="sex"
