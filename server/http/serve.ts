@@ -1,4 +1,4 @@
-import { type Express, json, type Request, type Response } from 'express'
+import { type Express, json, type NextFunction, type Request, type Response } from 'express'
 import type { z } from 'zod'
 import { reader } from '#db/client.ts'
 import { signedInActor } from '#server/auth/logins.ts'
@@ -15,21 +15,31 @@ const parseJson = json({ limit: '1mb', strict: true })
 
 /** Puts a route on the application: sign-in, permission, input, handling, output, in this order. */
 export function serve(app: Express, route: Route): void {
-  const handlers = [
-    async (request: Request, response: Response) => answer(route, request, response),
-  ]
   app[route.method](
     route.path,
-    ...(route.uploadBytes ? [receiveFile(route.uploadBytes)] : [parseJson]),
-    ...handlers,
+    // Before the body: a stranger's upload is not read into memory.
+    async (request: Request, response: Response, next: NextFunction) => {
+      response.locals.admission = await admit(route, request)
+      next()
+    },
+    route.uploadBytes ? receiveFile(route.uploadBytes) : parseJson,
+    (request: Request, response: Response) => answer(route, request, response),
   )
 }
 
-async function answer(route: Route, request: Request, response: Response): Promise<void> {
+type Admission = { actor: Actor; allowed: Allowed }
+
+/** Who asks, and what they may reach. @throws AppError when they may not */
+async function admit(route: Route, request: Request): Promise<Admission> {
   const actor = await signedInActor(request)
   refuseForSomebodyElse(request, actor)
-  const allowed = await admitted(route, request, actor)
+  const allowed = await allowedFor(route, request, actor)
   refuseWhereLocked(route, allowed)
+  return { actor, allowed }
+}
+
+async function answer(route: Route, request: Request, response: Response): Promise<void> {
+  const { actor, allowed } = response.locals.admission as Admission
   const result = await route.handle({
     actor,
     allowed,
@@ -49,7 +59,7 @@ function refuseForSomebodyElse(request: Request, actor: Actor): void {
 }
 
 /** Permission first: whoever may not do this learns nothing from what is wrong with the input. */
-async function admitted(route: Route, request: Request, actor: Actor): Promise<Allowed> {
+async function allowedFor(route: Route, request: Request, actor: Actor): Promise<Allowed> {
   if (!route.of) {
     if (!permitsInstallation(route.action, actor.roles)) throw new AppError('not-allowed')
     return undefined as never

@@ -97,6 +97,17 @@ describe('a body', () => {
   })
 })
 
+test('an upload by nobody is refused before its file is read', async () => {
+  const study = await api.given.study()
+  // Were the file read first, its size would be what is wrong with it.
+  const tooLarge = Buffer.alloc(51_000_000)
+  const { status, body } = await api.nobody
+    .post(`/api/studies/${study.id}/imports`)
+    .attach('file', tooLarge, 'data.csv')
+  expect(status).toBe(401)
+  expect(body.code).toBe('not-signed-in')
+})
+
 test('a page that somebody else opened writes nothing under another name', async () => {
   const study = await api.given.study()
   const nurse = await api.given.member(study, { role: 'coordinator', site: study.north })
